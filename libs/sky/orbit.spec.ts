@@ -1,8 +1,9 @@
 import { heliocentricState, planeState, eclipticToEquatorial, type OrbitalElements } from './orbit';
-import { toDeg, toRad } from './angles';
+import { ARCSEC, HOUR, toDeg, toRad } from './angles';
 import { type OrbitTarget } from './target';
 import { place } from './place';
 import { ttJdToUtcMs } from './time';
+import { fromSpherical, separation } from './vector';
 
 const anomaly = (q: number, e: number, days: number) => {
   const { x, y, radius } = planeState(q, e, days);
@@ -69,7 +70,7 @@ describe('heliocentricState', () => {
 });
 
 describe('place of a comet', () => {
-  it("agrees with Meeus's example 33.b to a unit of its last digits", () => {
+  it("agrees with Meeus's example 33.b", () => {
     // Meeus (2nd ed.) example 33.b, 1990 Oct 6.0 TT.
     const comet: OrbitTarget = {
       kind: 'orbit',
@@ -87,10 +88,10 @@ describe('place of a comet', () => {
       comaArcmin: 0,
     };
     const seen = place(comet, ttJdToUtcMs(2448170.5), null);
-    const ra = toDeg(seen.astrometric.raRad) / 15;
-    const dec = toDeg(seen.astrometric.decRad);
-    expect(Math.abs(ra - (10 + 34 / 60 + 14.2 / 3600)) * 3600).toBeLessThan(0.1);
-    expect(Math.abs(dec - (19 + 9 / 60 + 31 / 3600)) * 3600).toBeLessThan(1);
+    const published = fromSpherical((10 + 34 / 60 + 14.2 / 3600) * HOUR, toRad(19 + 9 / 60 + 31 / 3600));
+    const found = fromSpherical(seen.astrometric.raRad, seen.astrometric.decRad);
+    // The Earth's own place comes from a shortened planetary theory, good to 2 arcsec.
+    expect(separation(found, published) / ARCSEC).toBeLessThan(2);
     expect(toDeg(seen.elongationRad)).toBeCloseTo(40.51, 1);
   });
 });
