@@ -1,0 +1,14 @@
+export * from './horizon';
+export * from './site';
+export * from './programme';
+export * from './hours';
+export * from './result';
+export * from './season';
+export { prepareSite, type PreparedSite } from './siteInstant';
+export { createWorkbench, type Workbench, STEP_MS } from './measure';
+export * from './score';
+export * from './rules';
+export { clockWords, compassPoint, listWords } from './words';
+export * from './judge';
+export * from './search';
+export * from './habit';

@@ -1,0 +1,124 @@
+import { airmass, limitFromTable, skyLuminance } from '#darkness';
+import { refractionTrueToApparent, toRad, trackMagnitude, trackPlace } from '#sky';
+import { horizonAltitude } from './horizon';
+import { type Season } from './season';
+import { azimuth, type PreparedSite, sineAltitude, type SiteInstant } from './siteInstant';
+
+/** Why a target cannot be shown at an instant; 'none' where it can. */
+export type Hindrance = 'none' | 'low' | 'skyline' | 'sun' | 'faint';
+
+/** One target seen from one site at one instant: plain numbers, filled again and again. */
+export interface Look {
+  hindrance: Hindrance;
+  sinAltitude: number;
+  /** In (-π, π]; NaN while the target is below its least altitude. */
+  azimuthRad: number;
+  /** Of the sky behind it, nanolambert; NaN where the look ended before the sky mattered. */
+  luminanceNl: number;
+  /** Magnitudes to spare; NaN where the look ended before it. */
+  margin: number;
+}
+
+export function createLook(): Look {
+  return { hindrance: 'low', sinAltitude: 0, azimuthRad: NaN, luminanceNl: NaN, margin: NaN };
+}
+
+/** While the Sun is up no instrument is pointed nearer to it than this (common practice). */
+const SUN_CLEARANCE_RAD = toRad(15);
+const COS_SUN_CLEARANCE = Math.cos(SUN_CLEARANCE_RAD);
+const SUN_UP_RAD = toRad(-0.8333);
+
+/** Airmass over the sine of the airless altitude, 0 to 1, ready to be looked up. */
+const AIRMASS_STEPS = 2048;
+const AIRMASS = Float64Array.from({ length: AIRMASS_STEPS + 2 }, (_, i) => {
+  // Evenly spaced in the square root, for the airmass is steep at the horizon.
+  const altitude = Math.asin(Math.min(1, (i / AIRMASS_STEPS) ** 2));
+  return airmass(altitude + refractionTrueToApparent(altitude));
+});
+
+function airmassOfSine(sinAltitude: number): number {
+  const at = Math.sqrt(sinAltitude > 0 ? sinAltitude : 0) * AIRMASS_STEPS;
+  const before = at | 0;
+  const low = AIRMASS[before]!;
+  return low + (at - before) * (AIRMASS[before + 1]! - low);
+}
+
+const place = new Float64Array(3);
+
+/** What one item of the programme needs through one evening. */
+export interface EveningItem {
+  readonly index: number;
+  readonly isMoon: boolean;
+  readonly sinLeastAltitude: number;
+  readonly magnitude: number;
+}
+
+/** The items of a programme on one evening: magnitudes are taken at its middle. */
+export function eveningItem(season: Season, index: number, middleMs: number): EveningItem {
+  const item = season.programme.items[index]!;
+  const track = season.tracks[index]!;
+  return {
+    index,
+    isMoon: track === season.moon,
+    sinLeastAltitude: Math.sin(item.leastAltitudeRad),
+    magnitude: trackMagnitude(track, middleMs),
+  };
+}
+
+/**
+ * Looks at a target from a site at an instant: it is shown when it stands above its least altitude and the
+ * site's skyline, clear of the Sun while that is up, and bright enough for its instrument against the sky.
+ * Heights are airless, so that what is called clear of the skyline is so in any air. Allocates nothing.
+ */
+export function lookAt(
+  look: Look,
+  season: Season,
+  site: PreparedSite,
+  instant: SiteInstant,
+  item: EveningItem,
+): void {
+  const track = season.tracks[item.index]!;
+  trackPlace(track, instant.utcMs, place);
+  let x = place[0]!;
+  let y = place[1]!;
+  let z = place[2]!;
+  if (track.nearby) {
+    x -= site.fromAxisAu * instant.cosSidereal;
+    y -= site.fromAxisAu * instant.sinSidereal;
+    z -= site.fromEquatorAu;
+  }
+  const inverse = 1 / Math.sqrt(x * x + y * y + z * z);
+  x *= inverse;
+  y *= inverse;
+  z *= inverse;
+  const sine = sineAltitude(site, instant, x, y, z);
+  look.sinAltitude = sine;
+  look.azimuthRad = NaN;
+  look.luminanceNl = NaN;
+  look.margin = NaN;
+  if (sine < item.sinLeastAltitude) {
+    look.hindrance = 'low';
+    return;
+  }
+  const bearing = azimuth(site, instant, x, y, z);
+  look.azimuthRad = bearing;
+  const altitude = Math.asin(sine);
+  if (altitude < site.horizon.highestRad && altitude < horizonAltitude(site.horizon, bearing)) {
+    look.hindrance = 'skyline';
+    return;
+  }
+  if (
+    instant.sunAltitudeRad > SUN_UP_RAD &&
+    x * instant.sunX + y * instant.sunY + z * instant.sunZ > COS_SUN_CLEARANCE
+  ) {
+    look.hindrance = 'sun';
+    return;
+  }
+  // The Moon stands in its own glare; the sky a quarter turn off is what it is seen against.
+  const cosMoon = item.isMoon ? 0 : x * instant.moonX + y * instant.moonY + z * instant.moonZ;
+  const luminance = skyLuminance(instant.light, sine, bearing, cosMoon);
+  const dimming = site.site.sky.extinctionMagPerAirmass * airmassOfSine(sine);
+  look.luminanceNl = luminance;
+  look.margin = limitFromTable(season.limits[item.index]!, luminance) - item.magnitude - dimming;
+  look.hindrance = look.margin >= 0 ? 'none' : 'faint';
+}

@@ -1,0 +1,55 @@
+import { limitTable, type LimitTable } from '#darkness';
+import { buildTrack, MS_PER_DAY, seasonFrame, type SeasonFrame, type Track } from '#sky';
+import { type Programme, type ProgrammeItem } from './programme';
+
+/**
+ * All that a programme's season needs, computed once and shared by every site, evening and step. Plain data:
+ * it crosses to a worker as it is.
+ */
+export interface Season {
+  readonly programme: Programme;
+  readonly frame: SeasonFrame;
+  readonly sun: Track;
+  readonly moon: Track;
+  /** One an item of the programme, in its order. */
+  readonly tracks: readonly Track[];
+  readonly limits: readonly LimitTable[];
+}
+
+/** A day around the season for time zones and for evenings that run into the next day. */
+const EDGE_MS = 2 * MS_PER_DAY;
+
+/** Prepares a programme for all evenings from one date to another, 'YYYY-MM-DD', both included. */
+export function prepareSeason(programme: Programme, fromDate: string, toDate: string): Season {
+  const frame = seasonFrame(Date.parse(fromDate) - EDGE_MS, Date.parse(toDate) + EDGE_MS);
+  const sun = buildTrack({ kind: 'solarSystem', name: 'Sun', body: 'Sun' }, frame);
+  const moon = buildTrack({ kind: 'solarSystem', name: 'Moon', body: 'Moon' }, frame);
+  const tables = new Map<string, LimitTable>();
+  return {
+    programme,
+    frame,
+    sun,
+    moon,
+    tracks: programme.items.map(({ target }) =>
+      target.kind === 'solarSystem' && target.body === 'Moon' ? moon : buildTrack(target, frame),
+    ),
+    limits: programme.items.map((item) => sharedTable(tables, item)),
+  };
+}
+
+/** Targets of one size in one instrument share a table. */
+function sharedTable(tables: Map<string, LimitTable>, { target, instrument }: ProgrammeItem): LimitTable {
+  const [major, minor] = apparentSizeArcmin(target);
+  const key = JSON.stringify([instrument, major, minor]);
+  const known = tables.get(key);
+  if (known !== undefined) return known;
+  const made = limitTable(instrument, major, minor);
+  tables.set(key, made);
+  return made;
+}
+
+/** The size by which a target is judged against the sky; planets and the Moon count as points. */
+function apparentSizeArcmin(target: ProgrammeItem['target']): readonly [major: number, minor: number] {
+  if (target.kind === 'fixed') return [target.majorArcmin, target.minorArcmin];
+  return target.kind === 'orbit' ? [target.comaArcmin, target.comaArcmin] : [0, 0];
+}
