@@ -15,7 +15,7 @@ module.exports = {
     '<rootDir>/test/**/*.spec.ts',
   ],
   transform: {
-    '^.+\\.ts$': ['@swc/jest', { ...swc, swcrc: false }],
+    '^.+\\.ts$': ['@swc/jest', { ...swc, module: { type: 'commonjs' }, swcrc: false }],
     '^.+\\.m?js$': ['@swc/jest', { jsc: { target: 'es2022' }, module: { type: 'commonjs' }, swcrc: false }],
   },
   // ical-generator and the like ship only ES modules; Node loads them through require() from 20.19,

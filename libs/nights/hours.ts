@@ -1,6 +1,6 @@
 import { type EveningLight } from '#darkness';
-import { DateTime } from 'luxon';
 import { type Gate } from './site';
+import { localTimeMs, type ZoneClock } from './zoneClock';
 
 export type Twilight = 'sunset' | 'civilDusk' | 'nauticalDusk' | 'astronomicalDusk';
 
@@ -32,43 +32,21 @@ export interface PublicHours {
 export type HoursAnswer =
   { readonly hours: PublicHours; readonly none: null } | { readonly hours: null; readonly none: string };
 
-/** What the hours rule needs to know of an evening's place and light. */
-export interface EveningClock {
-  readonly date: string;
-  readonly zone: string;
-}
-
 const MINUTE_MS = 60_000;
-
-/**
- * The UTC instant of a local time 'HH:MM' inside an evening, which runs from local noon to the next local
- * noon: times before noon belong to the next day. A time that a clock change skips is taken after the gap.
- */
-export function localTimeMs({ date, zone }: EveningClock, time: string): number {
-  const [hour = 0, minute = 0] = time.split(':').map(Number);
-  const day = DateTime.fromISO(date, { zone });
-  const on = hour < 12 ? day.plus({ days: 1 }) : day;
-  return on.set({ hour, minute, second: 0, millisecond: 0 }).toMillis();
-}
-
-/** UTC instants of an evening's two local noons. */
-export function eveningSpan(clock: EveningClock): { readonly fromMs: number; readonly toMs: number } {
-  const noon = DateTime.fromISO(clock.date, { zone: clock.zone }).set({ hour: 12 });
-  return { fromMs: noon.toMillis(), toMs: noon.plus({ days: 1 }).toMillis() };
-}
 
 /** The public hours of one evening by the rule, kept inside the gate hours. */
 export function publicHours(
   rule: HoursRule,
   gate: Gate,
-  clock: EveningClock,
+  clock: ZoneClock,
+  date: string,
   light: Pick<EveningLight, Twilight>,
 ): HoursAnswer {
   let startMs: number;
   let endMs: number;
   if (rule.kind === 'fixed') {
-    startMs = localTimeMs(clock, rule.start);
-    endMs = localTimeMs(clock, rule.end);
+    startMs = localTimeMs(clock, date, rule.start);
+    endMs = localTimeMs(clock, date, rule.end);
   } else {
     const fades = light[rule.from];
     if (fades === null) {
@@ -77,14 +55,14 @@ export function publicHours(
     startMs = fades + rule.offsetMinutes * MINUTE_MS;
     endMs = startMs + rule.durationMinutes * MINUTE_MS;
     if (rule.latest !== null) {
-      endMs = Math.min(endMs, localTimeMs(clock, rule.latest));
+      endMs = Math.min(endMs, localTimeMs(clock, date, rule.latest));
       if (endMs <= startMs) {
         return { hours: null, none: `It gets dark only after ${rule.latest}, the latest hour for visitors.` };
       }
     }
   }
-  if (gate.opens !== null) startMs = Math.max(startMs, localTimeMs(clock, gate.opens));
-  if (gate.closes !== null) endMs = Math.min(endMs, localTimeMs(clock, gate.closes));
+  if (gate.opens !== null) startMs = Math.max(startMs, localTimeMs(clock, date, gate.opens));
+  if (gate.closes !== null) endMs = Math.min(endMs, localTimeMs(clock, date, gate.closes));
   return endMs > startMs
     ? { hours: { startMs, endMs }, none: null }
     : { hours: null, none: 'The public hours fall outside the gate hours.' };

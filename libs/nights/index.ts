@@ -2,6 +2,7 @@ export * from './horizon';
 export * from './site';
 export * from './programme';
 export * from './hours';
+export * from './zoneClock';
 export * from './result';
 export * from './season';
 export { prepareSite, type PreparedSite } from './siteInstant';

@@ -24,7 +24,7 @@ import { judgeEvening } from './judge';
 import { createWorkbench } from './measure';
 import { DEFAULT_WEIGHTS, type Programme } from './programme';
 import { type JudgedEvening } from './result';
-import { localTimeMs } from './hours';
+import { localTimeMs, zoneClock } from './zoneClock';
 import { prepareSeason, type Season } from './season';
 import { type NightSite } from './site';
 import { prepareSite } from './siteInstant';
@@ -75,9 +75,9 @@ describe('an evening, whatever the site and date', () => {
           expect(score).toBe(0);
           return;
         }
-        const on = { date, zone: site.zone };
-        expect(publicHours.startMs).toBeGreaterThanOrEqual(localTimeMs(on, opens.text));
-        expect(publicHours.endMs).toBeLessThanOrEqual(localTimeMs(on, closes.text));
+        const clock = zoneClock(site.zone);
+        expect(publicHours.startMs).toBeGreaterThanOrEqual(localTimeMs(clock, date, opens.text));
+        expect(publicHours.endMs).toBeLessThanOrEqual(localTimeMs(clock, date, closes.text));
         expect(publicHours.endMs).toBeGreaterThan(publicHours.startMs);
       }),
       { numRuns: 150 },

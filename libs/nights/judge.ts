@@ -1,7 +1,7 @@
 import { type EveningLight, luminanceToMag } from '#darkness';
 import { toDeg } from '#sky';
 import { seasonEveningLight } from './eveningSky';
-import { eveningSpan, type HoursAnswer, type PublicHours, publicHours } from './hours';
+import { type HoursAnswer, type PublicHours, publicHours } from './hours';
 import { coarseInstants, type MeasuredTarget, measureTargets, type Workbench } from './measure';
 import { type ScoreWeights } from './programme';
 import { type JudgedEvening, type PartName, type ScorePart, type Showing } from './result';
@@ -9,6 +9,7 @@ import { type EveningShares, eveningShares, roundPoints, scoreOf } from './score
 import { type Season } from './season';
 import { type PreparedSite, trackAltitude } from './siteInstant';
 import { partWords, showingWords } from './words';
+import { eveningSpan } from './zoneClock';
 
 /** An evening's figures before any words are made of them. */
 export interface EveningFigures {
@@ -29,10 +30,9 @@ export function figureEvening(
   date: string,
 ): EveningFigures {
   const { programme } = season;
-  const clock = { date, zone: site.site.zone };
-  const { fromMs, toMs } = eveningSpan(clock);
+  const { fromMs, toMs } = eveningSpan(site.clock, date);
   const light = seasonEveningLight(season, site, fromMs, toMs);
-  const answer = publicHours(programme.hours, site.site.gate, clock, light);
+  const answer = publicHours(programme.hours, site.site.gate, site.clock, date, light);
   if (answer.hours === null) return { light, answer, shares: null, score: 0, shown: 0 };
   measureTargets(bench, season, site, answer.hours);
   const shares = eveningShares(season, bench.targets, coarseInstants(bench, season, site, answer.hours));

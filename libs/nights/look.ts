@@ -1,6 +1,7 @@
 import { airmass, limitFromTable, skyLuminance } from '#darkness';
 import { refractionTrueToApparent, toRad, trackMagnitude, trackPlace } from '#sky';
 import { horizonAltitude } from './horizon';
+import { type PublicHours } from './hours';
 import { type Season } from './season';
 import { azimuth, type PreparedSite, sineAltitude, type SiteInstant } from './siteInstant';
 
@@ -44,25 +45,64 @@ function airmassOfSine(sinAltitude: number): number {
 }
 
 const place = new Float64Array(3);
+const nodes = new Float64Array(12);
 
-/** What one item of the programme needs through one evening. */
+/** What one item of the programme needs through one evening; filled again and again. */
 export interface EveningItem {
-  readonly index: number;
-  readonly isMoon: boolean;
-  readonly sinLeastAltitude: number;
-  readonly magnitude: number;
+  index: number;
+  isMoon: boolean;
+  nearby: boolean;
+  sinLeastAltitude: number;
+  magnitude: number;
+  /** The geocentric place over the public hours: a cubic in the share of them passed, four numbers an axis. */
+  readonly path: Float64Array;
+  startMs: number;
+  perMs: number;
 }
 
-/** The items of a programme on one evening: magnitudes are taken at its middle. */
-export function eveningItem(season: Season, index: number, middleMs: number): EveningItem {
-  const item = season.programme.items[index]!;
-  const track = season.tracks[index]!;
+export function createEveningItem(): EveningItem {
   return {
-    index,
-    isMoon: track === season.moon,
-    sinLeastAltitude: Math.sin(item.leastAltitudeRad),
-    magnitude: trackMagnitude(track, middleMs),
+    index: 0,
+    isMoon: false,
+    nearby: false,
+    sinLeastAltitude: 0,
+    magnitude: NaN,
+    path: new Float64Array(12),
+    startMs: 0,
+    perMs: 0,
   };
+}
+
+/**
+ * Fills the item of an evening. Its magnitude is taken at the middle of the public hours; its place is the
+ * cubic through four places spread over them, within 0.001 arcsec of the track even for the Moon and six
+ * hours.
+ */
+export function setEveningItem(item: EveningItem, season: Season, index: number, hours: PublicHours): void {
+  const { leastAltitudeRad } = season.programme.items[index]!;
+  const track = season.tracks[index]!;
+  const length = hours.endMs - hours.startMs;
+  item.index = index;
+  item.isMoon = track === season.moon;
+  item.nearby = track.nearby;
+  item.sinLeastAltitude = Math.sin(leastAltitudeRad);
+  item.magnitude = trackMagnitude(track, hours.startMs + length / 2);
+  item.startMs = hours.startMs;
+  item.perMs = 1 / length;
+  for (let k = 0; k < 4; k++) {
+    trackPlace(track, hours.startMs + (length * k) / 3, place);
+    for (let axis = 0; axis < 3; axis++) nodes[4 * axis + k] = place[axis]!;
+  }
+  for (let axis = 0; axis < 3; axis++) {
+    const f0 = nodes[4 * axis]!;
+    const f1 = nodes[4 * axis + 1]!;
+    const f2 = nodes[4 * axis + 2]!;
+    const f3 = nodes[4 * axis + 3]!;
+    item.path[4 * axis] = f0;
+    item.path[4 * axis + 1] = (-11 * f0 + 18 * f1 - 9 * f2 + 2 * f3) / 2;
+    item.path[4 * axis + 2] = (9 * (2 * f0 - 5 * f1 + 4 * f2 - f3)) / 2;
+    item.path[4 * axis + 3] = (9 * (-f0 + 3 * f1 - 3 * f2 + f3)) / 2;
+  }
 }
 
 /**
@@ -77,12 +117,12 @@ export function lookAt(
   instant: SiteInstant,
   item: EveningItem,
 ): void {
-  const track = season.tracks[item.index]!;
-  trackPlace(track, instant.utcMs, place);
-  let x = place[0]!;
-  let y = place[1]!;
-  let z = place[2]!;
-  if (track.nearby) {
+  const { path } = item;
+  const u = (instant.utcMs - item.startMs) * item.perMs;
+  let x = path[0]! + u * (path[1]! + u * (path[2]! + u * path[3]!));
+  let y = path[4]! + u * (path[5]! + u * (path[6]! + u * path[7]!));
+  let z = path[8]! + u * (path[9]! + u * (path[10]! + u * path[11]!));
+  if (item.nearby) {
     x -= site.fromAxisAu * instant.cosSidereal;
     y -= site.fromAxisAu * instant.sinSidereal;
     z -= site.fromEquatorAu;

@@ -1,5 +1,13 @@
 import { highestBetween } from './horizon';
-import { createLook, type EveningItem, eveningItem, type Hindrance, type Look, lookAt } from './look';
+import {
+  createEveningItem,
+  createLook,
+  type EveningItem,
+  type Hindrance,
+  type Look,
+  lookAt,
+  setEveningItem,
+} from './look';
 import { type PublicHours } from './hours';
 import { type Season } from './season';
 import { createSiteInstant, type PreparedSite, setSiteInstant, type SiteInstant } from './siteInstant';
@@ -35,6 +43,7 @@ export interface Workbench {
   readonly instants: SiteInstant[];
   readonly targets: MeasuredTarget[];
   readonly looks: Look[];
+  readonly item: EveningItem;
   readonly edgeInstant: SiteInstant;
   readonly edgeLook: Look;
   steps: number;
@@ -45,6 +54,7 @@ export function createWorkbench(): Workbench {
     instants: [],
     targets: [],
     looks: [],
+    item: createEveningItem(),
     edgeInstant: createSiteInstant(),
     edgeLook: createLook(),
     steps: 0,
@@ -73,10 +83,10 @@ export function measureTargets(
   const count = coarseCount(hours);
   for (const instant of bench.instants) instant.utcMs = NaN;
   while (bench.instants.length < count * PARTS) bench.instants.push(createSiteInstant());
-  const middle = (hours.startMs + hours.endMs) / 2;
   for (let index = 0; index < season.tracks.length; index++) {
     const measured = (bench.targets[index] ??= createMeasured());
-    measureTarget(bench, season, site, hours, count, eveningItem(season, index, middle), measured);
+    setEveningItem(bench.item, season, index, hours);
+    measureTarget(bench, season, site, hours, count, bench.item, measured);
   }
 }
 

@@ -3,6 +3,7 @@ import { axialDistances, seasonSidereal, trackPlace, type Track } from '#sky';
 import { type Horizon, prepareHorizon } from './horizon';
 import { type Season } from './season';
 import { type NightSite } from './site';
+import { type ZoneClock, zoneClock } from './zoneClock';
 
 /** A site with what does not change from step to step. */
 export interface PreparedSite {
@@ -12,6 +13,7 @@ export interface PreparedSite {
   readonly cosLatitude: number;
   readonly fromAxisAu: number;
   readonly fromEquatorAu: number;
+  readonly clock: ZoneClock;
 }
 
 export function prepareSite(site: NightSite): PreparedSite {
@@ -23,6 +25,7 @@ export function prepareSite(site: NightSite): PreparedSite {
     cosLatitude: Math.cos(site.observer.latitudeRad),
     fromAxisAu: fromAxis,
     fromEquatorAu: fromEquator,
+    clock: zoneClock(site.zone),
   };
 }
 

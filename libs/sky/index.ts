@@ -10,5 +10,6 @@ export * from './magnitude';
 export * from './appearance';
 export * from './place';
 export * from './altitudes';
+export * from './constellation';
 export * from './chebyshev';
 export * from './track';

@@ -7,7 +7,8 @@ import {
   RotationAxis,
   type RotationMatrix,
 } from 'astronomy-engine';
-import { astroTime, MS_PER_DAY } from './time';
+import { planetCorrection } from './planetCorrection';
+import { astroTime, MS_PER_DAY, utcMsToTtJd } from './time';
 import { type State } from './orbit';
 import { add, type Matrix, rotate, type Vector } from './vector';
 
@@ -45,7 +46,8 @@ export const RADIUS_KM: Readonly<Record<SolarBody, number>> = {
 /** Heliocentric Earth, place (au) and velocity (au/day), J2000 equator. */
 export function earthState(utcMs: number): State {
   const s = HelioState(Body.Earth, astroTime(utcMs));
-  return { position: [s.x, s.y, s.z], velocity: [s.vx, s.vy, s.vz] };
+  const position = add([s.x, s.y, s.z], planetCorrection('Earth', utcMsToTtJd(utcMs)));
+  return { position, velocity: [s.vx, s.vy, s.vz] };
 }
 
 /** Geometric heliocentric place of a body, au, J2000 equator. The Moon's is the Earth's plus its own orbit. */
@@ -53,7 +55,7 @@ export function heliocentricPlace(body: SolarBody, utcMs: number): Vector {
   if (body === 'Sun') return [0, 0, 0];
   if (body === 'Moon') return add(earthState(utcMs).position, geocentricMoon(utcMs));
   const v = HelioVector(body as Body, astroTime(utcMs));
-  return [v.x, v.y, v.z];
+  return add([v.x, v.y, v.z], planetCorrection(body, utcMsToTtJd(utcMs)));
 }
 
 /** Geometric geocentric Moon, au, J2000 equator. */

@@ -76,8 +76,10 @@ export function utcMsToTtJd(utcMs: number): number {
 
 /** A Julian date of Terrestrial Time as UTC epoch milliseconds. */
 export function ttJdToUtcMs(ttJd: number): number {
-  const near = jdToUtcMs(ttJd);
-  return near - ttMinusUtcSeconds(near - 69_000) * 1000;
+  const tt = jdToUtcMs(ttJd);
+  // The first guess can fall on the wrong side of a leap second by one second only; the second cannot.
+  const guess = tt - ttMinusUtcSeconds(tt) * 1000;
+  return tt - ttMinusUtcSeconds(guess) * 1000;
 }
 
 /** The instant in the form that the planetary library takes; UT1 is taken as UTC. */
