@@ -16,9 +16,9 @@ export function addCalendar(program: Command): void {
   program
     .command('calendar')
     .description('the published events as an iCalendar file')
-    .option('--out FILE', 'where to write it: .ics')
-    .option('--site-name NAME', 'only the events at this site')
-    .option('--db FILE', 'another database')
+    .option('--out <FILE>', 'where to write it: .ics')
+    .option('--site-name <NAME>', 'only the events at this site')
+    .option('--db <FILE>', 'another database')
     .option('--json', 'print what was written as JSON')
     .action(async ({ out, siteName, db, json }: CalendarOptions) => {
       if (out?.toLowerCase().endsWith('.ics') !== true) {

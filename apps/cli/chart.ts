@@ -28,18 +28,18 @@ export function addChart(program: Command): void {
   program
     .command('chart')
     .description('a finder chart of one target, as PDF or SVG')
-    .option('--target NAME', 'a planet, the Moon, a catalogued object or a body of --elements')
-    .option('--elements FILE', 'orbital elements in any of the known formats')
-    .option('--site LAT,LON[,ELEVATION_M]', 'decimal degrees, east positive, and metres')
-    .option('--site-name NAME', 'a site of the database')
-    .option('--zone IANA_ZONE', 'time zone of the printed times (else that of the place)')
-    .option('--at ISO_TIME', 'the instant for which the chart holds, with its offset')
-    .option('--scale SCALE', 'eye, binocular or eyepiece', 'binocular')
-    .option('--field DEG', "width of the field in degrees (else the scale's usual)")
-    .option('--orientation WAY', 'upright, rotated or mirrored', 'upright')
-    .option('--paper SIZE', 'a4 or letter', 'a4')
-    .option('--out FILE', 'where to write it: .pdf or .svg')
-    .option('--db FILE', 'another database')
+    .option('--target <NAME>', 'a planet, the Moon, a catalogued object or a body of --elements')
+    .option('--elements <FILE>', 'orbital elements in any of the known formats')
+    .option('--site <LAT,LON[,ELEVATION_M]>', 'decimal degrees, east positive, and metres')
+    .option('--site-name <NAME>', 'a site of the database')
+    .option('--zone <IANA_ZONE>', 'time zone of the printed times (else that of the place)')
+    .option('--at <ISO_TIME>', 'the instant for which the chart holds, with its offset')
+    .option('--scale <SCALE>', 'eye, binocular or eyepiece', 'binocular')
+    .option('--field <DEG>', "width of the field in degrees (else the scale's usual)")
+    .option('--orientation <WAY>', 'upright, rotated or mirrored', 'upright')
+    .option('--paper <SIZE>', 'a4 or letter', 'a4')
+    .option('--out <FILE>', 'where to write it: .pdf or .svg')
+    .option('--db <FILE>', 'another database')
     .option('--json', 'print the scene as JSON')
     .action(async (options: ChartOptions) => {
       const order = await chartOrder(options);
@@ -55,10 +55,12 @@ export function addChart(program: Command): void {
 
 async function chartOrder(options: ChartOptions): Promise<ChartOrder> {
   const { target, at, site, siteName, out, json } = options;
-  if (target === undefined)
+  if (target === undefined) {
     throw new BadInput('target', '--target was left out; give the name of what is to be found.');
-  if (at === undefined)
+  }
+  if (at === undefined) {
     throw new BadInput('at', '--at was left out; give an instant such as 2027-03-01T20:00:00Z.');
+  }
   if (out === undefined && json !== true) {
     throw new BadInput('out', '--out was left out; give the file to write, ending in .pdf or .svg.');
   }

@@ -16,8 +16,8 @@ export function addDemo(program: Command): void {
   program
     .command('demo')
     .description('load the invented demo club into an empty database')
-    .option('--as-of YYYY-MM-DD', 'the day around which it is built (else today)')
-    .option('--db FILE', 'another database')
+    .option('--as-of <YYYY-MM-DD>', 'the day around which it is built (else today)')
+    .option('--db <FILE>', 'another database')
     .option('--json', 'print what was loaded as JSON')
     .action(async ({ asOf, db, json }: DemoOptions) => {
       const day = parseDate('as-of', asOf ?? new Date().toISOString().slice(0, 10));

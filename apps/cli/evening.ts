@@ -21,12 +21,12 @@ export function addEvening(program: Command): void {
   program
     .command('evening')
     .description('the light of one evening: sunset, twilights, Moon and darkness')
-    .option('--site LAT,LON[,ELEVATION_M]', 'decimal degrees, east positive, and metres')
-    .option('--site-name NAME', 'a site of the database')
-    .option('--zone IANA_ZONE', 'time zone (else that of the place)')
-    .option('--date YYYY-MM-DD', 'the date on which the evening begins')
-    .option('--batch FILE', 'one JSON object of these options a line; - reads standard input')
-    .option('--db FILE', 'another database')
+    .option('--site <LAT,LON[,ELEVATION_M]>', 'decimal degrees, east positive, and metres')
+    .option('--site-name <NAME>', 'a site of the database')
+    .option('--zone <IANA_ZONE>', 'time zone (else that of the place)')
+    .option('--date <YYYY-MM-DD>', 'the date on which the evening begins')
+    .option('--batch <FILE>', 'one JSON object of these options a line; - reads standard input')
+    .option('--db <FILE>', 'another database')
     .option('--json', 'print JSON')
     .action(async (options: EveningOptions) => {
       if (options.batch !== undefined) {

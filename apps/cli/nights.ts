@@ -23,12 +23,12 @@ export function addNights(program: Command): void {
   program
     .command('nights')
     .description('what evenings are worth holding, best first')
-    .option('--from YYYY-MM-DD', 'first date of the season')
-    .option('--to YYYY-MM-DD', 'last date of the season')
-    .option('--site-name NAME...', 'only these sites')
-    .option('--programme NAME', 'what is to be shown (else the first programme)')
-    .option('--limit N', 'how many evenings to give')
-    .option('--db FILE', 'another database')
+    .option('--from <YYYY-MM-DD>', 'first date of the season')
+    .option('--to <YYYY-MM-DD>', 'last date of the season')
+    .option('--site-name <NAME...>', 'only these sites')
+    .option('--programme <NAME>', 'what is to be shown (else the first programme)')
+    .option('--limit <N>', 'how many evenings to give')
+    .option('--db <FILE>', 'another database')
     .option('--json', 'print JSON')
     .action(async (options: NightsOptions) => {
       const { from, to, siteName, programme, limit, db } = options;

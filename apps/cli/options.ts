@@ -89,3 +89,16 @@ function isDate(day: string): boolean {
   const parsed = new Date(`${day}T00:00:00Z`);
   return !Number.isNaN(parsed.getTime()) && parsed.toISOString().startsWith(day);
 }
+
+/** A TT instant, ISO without an offset (a trailing Z is taken as part of TT), as a Julian date. */
+export function parseTtInstant(text: string): number {
+  const match = /^(\d{4}-\d{2}-\d{2})(?:T(\d{2}:\d{2}(?::\d{2}(?:\.\d+)?)?)Z?)?$/.exec(text);
+  const ms = match === null ? NaN : Date.parse(`${match[1]!}T${match[2] ?? '00:00'}Z`);
+  if (Number.isNaN(ms) || !isDate(match![1]!)) {
+    throw new BadInput(
+      'at',
+      `--at was "${text}"; give a TT instant that exists, such as 2027-03-01T00:00:00.`,
+    );
+  }
+  return ms / 86_400_000 + 2_440_587.5;
+}

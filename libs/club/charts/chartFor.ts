@@ -1,0 +1,109 @@
+import { CATALOGUE_VERSION, constellationFigures, deepSkyObjects, loadStars } from '#catalogue';
+import {
+  buildScene,
+  type ChartRequest,
+  type ChartScale,
+  type Orientation,
+  type Paper,
+  renderPdf,
+  renderSvg,
+  type Scene,
+  usualFieldDeg,
+} from '#charts';
+import { type Observer, type Place, place, type SkyTarget, toDeg } from '#sky';
+import { problem } from '../clubProblem';
+import { type NamedTarget } from '../sky/namedTarget';
+import { chartPath } from './chartPath';
+import { chartWords } from './chartWords';
+
+/** A finder chart as it is asked for: what, from where, when and how. */
+export interface ChartOrder {
+  readonly target: NamedTarget;
+  readonly observer: Observer;
+  readonly zone: string;
+  /** The site's name, or its coordinates in words. */
+  readonly siteName: string;
+  readonly utcMs: number;
+  readonly scale: ChartScale;
+  /** Null takes the scale's usual field. */
+  readonly fieldDeg: number | null;
+  readonly orientation: Orientation;
+  readonly paper: Paper;
+  /** For what it is printed, such as an event's title; null for a chart by itself. */
+  readonly occasion: string | null;
+  /** When it is computed, for the foot line. */
+  readonly computedUtcMs: number;
+  readonly programVersion: string;
+}
+
+/** What a finished chart is sent or saved as. */
+export interface DrawnChart {
+  readonly contentType: 'application/pdf' | 'image/svg+xml';
+  readonly body: Buffer;
+  readonly fileName: string;
+}
+
+const SUN: SkyTarget = { kind: 'solarSystem', name: 'Sun', body: 'Sun' };
+const SUN_CLEARANCE_DEG = 15;
+
+/**
+ * The scene of a chart. Throws a ClubProblem where the target is the Sun or stands within 15 degrees of a Sun
+ * that is up, and a ChartProblem where scale, field or paper is none.
+ */
+export function chartScene(order: ChartOrder): Scene {
+  const seen = place(order.target.sky, order.utcMs, order.observer);
+  refuseNearSun(order, seen);
+  return buildScene(loadStars(), deepSkyObjects(), constellationFigures(), chartRequest(order, seen));
+}
+
+/** A chart drawn as PDF or SVG. The same order gives the same bytes. */
+export async function drawChart(scene: Scene, order: ChartOrder, format: 'pdf' | 'svg'): Promise<DrawnChart> {
+  const name = `${order.target.sky.name} ${order.scale} chart`.replace(/[^\p{L}\p{N}]+/gu, '-');
+  return format === 'svg'
+    ? { contentType: 'image/svg+xml', body: Buffer.from(renderSvg(scene)), fileName: `${name}.svg` }
+    : {
+        contentType: 'application/pdf',
+        body: await renderPdf(scene, { creationUtcMs: order.computedUtcMs }),
+        fileName: `${name}.pdf`,
+      };
+}
+
+function chartRequest(order: ChartOrder, seen: Place): ChartRequest {
+  const { target, observer, utcMs, scale } = order;
+  const { deepSky, sky } = target;
+  const fieldDeg = order.fieldDeg ?? usualFieldDeg[scale];
+  const sizeArcmin = seen.angularDiameterRad === null ? 0 : toDeg(seen.angularDiameterRad) * 60;
+  return {
+    scale,
+    fieldDeg: order.fieldDeg,
+    orientation: order.orientation,
+    paper: order.paper,
+    target: {
+      name: sky.name,
+      raRad: seen.astrometric.raRad,
+      decRad: seen.astrometric.decRad,
+      magnitude: seen.magnitude,
+      kind: target.kind,
+      majorArcmin: deepSky?.majorArcmin ?? sizeArcmin,
+      minorArcmin: deepSky?.minorArcmin ?? sizeArcmin,
+      positionAngleDeg: deepSky?.positionAngleDeg ?? null,
+    },
+    path: chartPath(sky, observer, order.zone, utcMs, fieldDeg),
+    view: { utcMs, latitudeRad: observer.latitudeRad, longitudeRad: observer.longitudeRad },
+    words: chartWords(order, seen, CATALOGUE_VERSION),
+  };
+}
+
+function refuseNearSun({ target, observer, utcMs }: ChartOrder, seen: Place): void {
+  const isSun = target.kind === 'Sun';
+  const sun = place(SUN, utcMs, observer).horizontal!;
+  if (!isSun && (toDeg(sun.altitudeRad) < -0.8333 || toDeg(seen.elongationRad) >= SUN_CLEARANCE_DEG)) return;
+  throw problem(
+    'invalid',
+    'target',
+    target.sky.name,
+    isSun
+      ? 'target was the Sun; no finder chart is drawn for it. Solar viewing needs certified filters and trained hands.'
+      : `target was ${target.sky.name}, which stands ${toDeg(seen.elongationRad).toFixed(1)} degrees from a Sun that is up; choose a time after sunset. Never point an instrument there.`,
+  );
+}
