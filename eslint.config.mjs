@@ -1,12 +1,12 @@
 import typescript from 'typescript-eslint';
-import { arrows } from './test/lint/arrows.mjs';
+import arrowsRule from './test/lint/arrows.cjs';
 
 export default typescript.config(
   { ignores: ['dist/**', 'node_modules/**', 'libs/club/database/generated/**', '.duskwright/**'] },
   {
     files: ['**/*.ts'],
     extends: [typescript.configs.strict, typescript.configs.stylistic],
-    plugins: { duskwright: { rules: { arrows } } },
+    plugins: { duskwright: { rules: { arrows: arrowsRule.arrows } } },
     rules: {
       'duskwright/arrows': 'error',
       '@typescript-eslint/no-extraneous-class': ['error', { allowWithDecorator: true }],

@@ -23,6 +23,7 @@ module.exports = {
   transformIgnorePatterns: ['/node_modules/(?!(ical-generator|ical\\.js)/)'],
   moduleNameMapper: {
     [`^#(${libs})$`]: '<rootDir>/libs/$1/index.ts',
+    '^#club/sky$': '<rootDir>/libs/club/sky/index.ts',
     '^#demo-data$': '<rootDir>/demo-data/index.ts',
   },
   modulePathIgnorePatterns: ['<rootDir>/dist/'],

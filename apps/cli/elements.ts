@@ -1,5 +1,5 @@
 import { type Command } from 'commander';
-import { elementState, compareElements, namedTarget } from '#club';
+import { elementState, compareElements, namedTarget } from '#club/sky';
 import { parseDesignation, toCheckJson } from '#elements';
 import { BadInput } from './badInput';
 import { runBatch } from './batch';

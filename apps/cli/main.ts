@@ -1,4 +1,5 @@
 import { Command, CommanderError } from 'commander';
+import { programVersion } from '#club/sky';
 import { badInputOf } from './badInput';
 import { say } from './output';
 
@@ -33,6 +34,7 @@ async function main(args: readonly string[]): Promise<void> {
     .description(
       "Picks the evenings, prints the charts and shares the schedule of a club's public viewing nights.",
     )
+    .version(programVersion())
     .showHelpAfterError('(add --help for the options)')
     .exitOverride()
     .configureOutput({ writeErr: (text) => process.stderr.write(text) });

@@ -1,12 +1,11 @@
 import { type Command } from 'commander';
 import { extinctionForElevation, type SiteSky, skyFromBortle } from '#darkness';
-import { namedTarget, skyAnswer, type SkyAnswer } from '#club';
+import { namedTarget, skyAnswer, type SkyAnswer } from '#club/sky';
 import { BadInput } from './badInput';
 import { runBatch } from './batch';
 import { elementFile } from './elementFile';
 import { parseInstant, parseNumber, parsePlace, type PlaceOption } from './options';
 import { print, printJson } from './output';
-import { siteFromDatabase } from './siteFromDatabase';
 
 interface SkyOptions {
   readonly target?: string;
@@ -61,6 +60,7 @@ interface Stand {
 
 async function namedSite({ siteName, db }: SkyOptions): Promise<Stand | null> {
   if (siteName === undefined) return null;
+  const { siteFromDatabase } = await import('./siteFromDatabase.js');
   const { observer, sky } = await siteFromDatabase(db, siteName);
   return { observer, sky };
 }

@@ -1,11 +1,10 @@
 // The lint rule behind the import directions of DEVELOPERS.md: which part may import which.
-import { dirname, join, relative, resolve, sep } from 'node:path';
-import { fileURLToPath } from 'node:url';
+const { dirname, join, relative, resolve, sep } = require('node:path');
 
-const root = join(dirname(fileURLToPath(import.meta.url)), '..', '..');
+const root = join(__dirname, '..', '..');
 
 /** What each part may import from the project besides itself. */
-export const allowed = {
+const allowed = {
   'libs/sky': [],
   'libs/elements': ['libs/sky'],
   'libs/darkness': ['libs/sky'],
@@ -31,14 +30,15 @@ export const allowed = {
 };
 
 /** Packages that only the outer parts may use: frameworks, the database, files and the network. */
-const outerPackages = /^(@nestjs\/|nestjs-|@prisma\/|prisma$|better-sqlite3$|(node:)?(http|https|net|child_process|worker_threads)$)/;
+const outerPackages =
+  /^(@nestjs\/|nestjs-|@prisma\/|prisma$|better-sqlite3$|(node:)?(http|https|net|child_process|worker_threads)$)/;
 const filePackages = /^(node:)?fs(\/|$)/;
 const outerParts = /^(libs\/club|apps\/|demo-data|test)/;
 /** Libraries that load data files of their own, and the only ones that may touch files. */
 const loadsOwnFiles = /^libs\/(catalogue|charts|print)$/;
 
 /** Says why `file` (relative to the root) may not import `source`, or null where it may. */
-export function forbiddenImport(file, source) {
+function forbiddenImport(file, source) {
   const from = partOf(file);
   if (from === null || from.startsWith('test') || /\.spec\.ts$/.test(file)) return null;
   if (outerPackages.test(source) && !outerParts.test(from)) {
@@ -67,13 +67,16 @@ function partOf(file) {
 
 function targetOf(file, source) {
   if (source === '#demo-data') return 'demo-data';
-  if (source.startsWith('#')) return `libs/${source.slice(1)}`;
+  // '#club/sky' is a second door of the same part.
+  if (source.startsWith('#')) return `libs/${source.slice(1).split('/')[0]}`;
   if (!source.startsWith('.')) return null;
-  const target = relative(root, resolve(root, dirname(file), source)).split(sep).join('/');
+  const target = relative(root, resolve(root, dirname(file), source))
+    .split(sep)
+    .join('/');
   return partOf(`${target}/x`);
 }
 
-export const arrows = {
+const arrows = {
   meta: { type: 'problem', schema: [], messages: { forbidden: '{{why}}' } },
   create(context) {
     const file = relative(root, context.filename).split(sep).join('/');
@@ -90,3 +93,5 @@ export const arrows = {
     };
   },
 };
+
+module.exports = { allowed, arrows, forbiddenImport };

@@ -1,3 +1,4 @@
+import { setMaxListeners } from 'node:events';
 import {
   bestFirst,
   type BlockResult,
@@ -69,9 +70,12 @@ const BLOCK_EVENINGS = 46;
 export async function searchSeason(search: SeasonSearch, watch: SearchWatch = {}): Promise<Ranking> {
   const started = performance.now();
   watch.signal?.throwIfAborted();
-  const pool = await searchPool();
+  const pool = searchPool();
+  const signal = watch.signal && AbortSignal.any([watch.signal]);
+  // Every block waits on it; Node would warn of a leak after ten.
+  if (signal) setMaxListeners(0, signal);
   const inWorker = <Result>(name: string, task: unknown): Promise<Result> =>
-    pool.run(task, { name, ...(watch.signal && { signal: watch.signal }) }) as Promise<Result>;
+    pool.run(task, { name, ...(signal && { signal }) }) as Promise<Result>;
   const dates = datesBetween(search.from, search.to);
   const closed: ClosedEvening[] = [];
   const blocks = search.sites.flatMap((site): SearchBlock[] => {

@@ -1,25 +1,22 @@
 import { availableParallelism } from 'node:os';
 import { join } from 'node:path';
-import type { Piscina } from 'piscina';
+import { Piscina } from 'piscina';
 import { projectRoot } from '../projectRoot';
 
-let pool: Promise<Piscina> | null = null;
+let pool: Piscina | null = null;
 
 /**
  * The pool of search workers, started when first needed and kept: one thread a core. Workers run compiled
  * code, so a build must stand in dist/.
  */
-export function searchPool(): Promise<Piscina> {
-  pool ??= import('piscina').then(
-    ({ Piscina: Pool }) =>
-      new Pool({
-        filename: join(projectRoot, 'dist', 'libs', 'club', 'evenings', 'searchWorker.js'),
-        maxThreads: availableParallelism(),
-        // An idle pool does not keep threads for a server that searches once a day.
-        minThreads: 0,
-        idleTimeout: 30_000,
-      }),
-  );
+export function searchPool(): Piscina {
+  pool ??= new Piscina({
+    filename: join(projectRoot, 'dist', 'libs', 'club', 'evenings', 'searchWorker.js'),
+    maxThreads: availableParallelism(),
+    // An idle pool does not keep threads for a server that searches once a day.
+    minThreads: 0,
+    idleTimeout: 30_000,
+  });
   return pool;
 }
 
@@ -27,5 +24,5 @@ export function searchPool(): Promise<Piscina> {
 export async function closeSearchPool(): Promise<void> {
   const running = pool;
   pool = null;
-  if (running !== null) await (await running).destroy();
+  await running?.destroy();
 }
