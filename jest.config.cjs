@@ -18,9 +18,9 @@ module.exports = {
     '^.+\\.ts$': ['@swc/jest', { ...swc, module: { type: 'commonjs' }, swcrc: false }],
     '^.+\\.m?js$': ['@swc/jest', { jsc: { target: 'es2022' }, module: { type: 'commonjs' }, swcrc: false }],
   },
-  // ical-generator and the like ship only ES modules; Node loads them through require() from 20.19,
-  // Jest needs them turned into CommonJS.
-  transformIgnorePatterns: ['/node_modules/(?!(ical-generator|ical\\.js)/)'],
+  // ical.js ships only ES modules; Node loads them through require() from 20.19,
+  // but Jest needs them turned into CommonJS.
+  transformIgnorePatterns: ['/node_modules/(?!ical\\.js/)'],
   moduleNameMapper: {
     [`^#(${libs})$`]: '<rootDir>/libs/$1/index.ts',
     '^#club/sky$': '<rootDir>/libs/club/sky/index.ts',
