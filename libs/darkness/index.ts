@@ -27,4 +27,5 @@ export {
   visibilityMargin,
   type VisibleObject,
 } from './visibility';
-export { type LimitTable, limitFromTable, limitTable } from './limitTable';
+export { brightestSkyShowing, type LimitTable, limitFromTable, limitTable } from './limitTable';
+export { brightestSky, COS_MOON_CLEARANCE } from './brightestSky';

@@ -1,10 +1,12 @@
 import { DEFAULT_OBSERVING, type Instrument, type Observing } from './instrument';
-import { luminanceToMag } from './luminance';
+import { luminanceToMag, magToLuminance } from './luminance';
 import { bestViewLimit, ovalArea, viewsOf } from './visibility';
 
 /** Limiting magnitudes of one instrument for one size of object over all skies, ready to be looked up. */
 export interface LimitTable {
   readonly limits: Float64Array;
+  /** The least of each limit and those against all darker skies. */
+  readonly leastFrom: Float64Array;
 }
 
 const BRIGHTEST = 1.5;
@@ -27,7 +29,9 @@ export function limitTable(
   const areaSr = ovalArea(majorArcmin, minorArcmin);
   const limits = new Float64Array(LAST + 1);
   for (let i = 0; i <= LAST; i++) limits[i] = bestViewLimit(views, BRIGHTEST + i / PER_MAGNITUDE, areaSr);
-  return { limits };
+  const leastFrom = limits.slice();
+  for (let i = LAST - 1; i >= 0; i--) leastFrom[i] = Math.min(leastFrom[i]!, leastFrom[i + 1]!);
+  return { limits, leastFrom };
 }
 
 /**
@@ -42,4 +46,22 @@ export function limitFromTable(table: LimitTable, luminanceNl: number): number {
   const before = at | 0;
   const low = limits[before]!;
   return low + (at - before) * (limits[before + 1]! - low);
+}
+
+/**
+ * A sky in nanolambert such that an object of this magnitude (extinction included) shows against it and every
+ * darker one by the table: the brightest such sky but for one step of the table, or 0 where there is none.
+ */
+export function brightestSkyShowing(table: LimitTable, magnitude: number): number {
+  const { leastFrom } = table;
+  if (!(leastFrom[LAST]! >= magnitude)) return 0;
+  let low = 0;
+  let high = LAST;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (leastFrom[middle]! >= magnitude) high = middle;
+    else low = middle + 1;
+  }
+  // A hair darker, so that rounding of the logarithm cannot put it on the wrong side of the step.
+  return magToLuminance(BRIGHTEST + low / PER_MAGNITUDE) * (1 - 1e-12);
 }

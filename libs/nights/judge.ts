@@ -28,13 +28,14 @@ export function figureEvening(
   site: PreparedSite,
   weights: ScoreWeights,
   date: string,
+  closely: boolean,
 ): EveningFigures {
   const { programme } = season;
   const { fromMs, toMs } = eveningSpan(site.clock, date);
   const light = seasonEveningLight(season, site, fromMs, toMs);
   const answer = publicHours(programme.hours, site.site.gate, site.clock, date, light);
   if (answer.hours === null) return { light, answer, shares: null, score: 0, shown: 0 };
-  measureTargets(bench, season, site, answer.hours);
+  measureTargets(bench, season, site, answer.hours, closely);
   const shares = eveningShares(season, bench.targets, coarseInstants(bench, season, site, answer.hours));
   let shown = 0;
   for (let i = 0; i < programme.items.length; i++) if (bench.targets[i]!.shown) shown++;
@@ -50,7 +51,7 @@ export function judgeEvening(
   date: string,
 ): JudgedEvening {
   const { programme } = season;
-  const figures = figureEvening(bench, season, site, weights, date);
+  const figures = figureEvening(bench, season, site, weights, date, true);
   const { answer, shares, light } = figures;
   const { zone, name } = site.site;
   const common = {

@@ -1,4 +1,4 @@
-import { airmass, limitFromTable, skyLuminance } from '#darkness';
+import { airmass, brightestSkyShowing, COS_MOON_CLEARANCE, limitFromTable, skyLuminance } from '#darkness';
 import { refractionTrueToApparent, toRad, trackMagnitude, trackPlace } from '#sky';
 import { horizonAltitude } from './horizon';
 import { type PublicHours } from './hours';
@@ -12,7 +12,7 @@ export type Hindrance = 'none' | 'low' | 'skyline' | 'sun' | 'faint';
 export interface Look {
   hindrance: Hindrance;
   sinAltitude: number;
-  /** In (-π, π]; NaN while the target is below its least altitude. */
+  /** In (-π, π]; NaN where the look ended before it mattered. */
   azimuthRad: number;
   /** Of the sky behind it, nanolambert; NaN where the look ended before the sky mattered. */
   luminanceNl: number;
@@ -54,6 +54,8 @@ export interface EveningItem {
   nearby: boolean;
   sinLeastAltitude: number;
   magnitude: number;
+  /** It shows, even at its least altitude, against this sky (nanolambert) and every darker one. */
+  darkEnoughNl: number;
   /** The geocentric place over the public hours: a cubic in the share of them passed, four numbers an axis. */
   readonly path: Float64Array;
   startMs: number;
@@ -67,6 +69,7 @@ export function createEveningItem(): EveningItem {
     nearby: false,
     sinLeastAltitude: 0,
     magnitude: NaN,
+    darkEnoughNl: 0,
     path: new Float64Array(12),
     startMs: 0,
     perMs: 0,
@@ -78,7 +81,13 @@ export function createEveningItem(): EveningItem {
  * cubic through four places spread over them, within 0.001 arcsec of the track even for the Moon and six
  * hours.
  */
-export function setEveningItem(item: EveningItem, season: Season, index: number, hours: PublicHours): void {
+export function setEveningItem(
+  item: EveningItem,
+  season: Season,
+  site: PreparedSite,
+  index: number,
+  hours: PublicHours,
+): void {
   const { leastAltitudeRad } = season.programme.items[index]!;
   const track = season.tracks[index]!;
   const length = hours.endMs - hours.startMs;
@@ -87,6 +96,8 @@ export function setEveningItem(item: EveningItem, season: Season, index: number,
   item.nearby = track.nearby;
   item.sinLeastAltitude = Math.sin(leastAltitudeRad);
   item.magnitude = trackMagnitude(track, hours.startMs + length / 2);
+  const thickest = site.site.sky.extinctionMagPerAirmass * airmassOfSine(item.sinLeastAltitude);
+  item.darkEnoughNl = brightestSkyShowing(season.limits[index]!, item.magnitude + thickest);
   item.startMs = hours.startMs;
   item.perMs = 1 / length;
   for (let k = 0; k < 4; k++) {
@@ -109,6 +120,9 @@ export function setEveningItem(item: EveningItem, season: Season, index: number,
  * Looks at a target from a site at an instant: it is shown when it stands above its least altitude and the
  * site's skyline, clear of the Sun while that is up, and bright enough for its instrument against the sky.
  * Heights are airless, so that what is called clear of the skyline is so in any air. Allocates nothing.
+ *
+ * @param closely also works out sky and margin where a bound shows already that there is margin; the
+ * hindrance is the same either way
  */
 export function lookAt(
   look: Look,
@@ -116,6 +130,7 @@ export function lookAt(
   site: PreparedSite,
   instant: SiteInstant,
   item: EveningItem,
+  closely: boolean,
 ): void {
   const { path } = item;
   const u = (instant.utcMs - item.startMs) * item.perMs;
@@ -140,12 +155,14 @@ export function lookAt(
     look.hindrance = 'low';
     return;
   }
-  const bearing = azimuth(site, instant, x, y, z);
-  look.azimuthRad = bearing;
-  const altitude = Math.asin(sine);
-  if (altitude < site.horizon.highestRad && altitude < horizonAltitude(site.horizon, bearing)) {
-    look.hindrance = 'skyline';
-    return;
+  let bearing = NaN;
+  if (sine < site.sinHighest) {
+    bearing = azimuth(site, instant, x, y, z);
+    look.azimuthRad = bearing;
+    if (Math.asin(sine) < horizonAltitude(site.horizon, bearing)) {
+      look.hindrance = 'skyline';
+      return;
+    }
   }
   if (
     instant.sunAltitudeRad > SUN_UP_RAD &&
@@ -156,6 +173,14 @@ export function lookAt(
   }
   // The Moon stands in its own glare; the sky a quarter turn off is what it is seen against.
   const cosMoon = item.isMoon ? 0 : x * instant.moonX + y * instant.moonY + z * instant.moonZ;
+  if (!closely && instant.brightestNl <= item.darkEnoughNl && cosMoon <= COS_MOON_CLEARANCE) {
+    look.hindrance = 'none';
+    return;
+  }
+  if (Number.isNaN(bearing)) {
+    bearing = azimuth(site, instant, x, y, z);
+    look.azimuthRad = bearing;
+  }
   const luminance = skyLuminance(instant.light, sine, bearing, cosMoon);
   const dimming = site.site.sky.extinctionMagPerAirmass * airmassOfSine(sine);
   look.luminanceNl = luminance;

@@ -9,6 +9,7 @@ import {
   setEveningItem,
 } from './look';
 import { type PublicHours } from './hours';
+import { staysLow } from './staysLow';
 import { type Season } from './season';
 import { createSiteInstant, type PreparedSite, setSiteInstant, type SiteInstant } from './siteInstant';
 
@@ -32,6 +33,9 @@ export interface MeasuredTarget {
   shown: boolean;
   /** Start and end in turn, UTC ms. */
   readonly edges: number[];
+  /** Sine of its greatest altitude at the steps at which it is shown; 0 where it never is. */
+  highestSine: number;
+  /** Worked out only where the evening was measured closely. */
   readonly best: MeasuredBest;
   /** How many of the coarse steps each hindrance spoiled. */
   readonly hindrances: Record<Hindrance, number>;
@@ -46,6 +50,8 @@ export interface Workbench {
   readonly item: EveningItem;
   readonly edgeInstant: SiteInstant;
   readonly edgeLook: Look;
+  /** Whether sky and margin are wanted at every step, not only what is shown. */
+  closely: boolean;
   steps: number;
 }
 
@@ -57,6 +63,7 @@ export function createWorkbench(): Workbench {
     item: createEveningItem(),
     edgeInstant: createSiteInstant(),
     edgeLook: createLook(),
+    closely: true,
     steps: 0,
   };
 }
@@ -67,7 +74,8 @@ export function coarseCount({ startMs, endMs }: PublicHours): number {
 }
 
 /**
- * Measures every target of the programme through an evening's public hours.
+ * Measures every target of the programme through an evening's public hours; `closely` also finds each one's
+ * best moment, and is the same else.
  *
  * A showing's edges are found to under 5 s: five-minute steps first; each step in which something changes, or
  * in which the skyline might cut in, is divided in ten; the edge is then halved down inside its half minute.
@@ -79,13 +87,15 @@ export function measureTargets(
   season: Season,
   site: PreparedSite,
   hours: PublicHours,
+  closely: boolean,
 ): void {
+  bench.closely = closely;
   const count = coarseCount(hours);
   for (const instant of bench.instants) instant.utcMs = NaN;
   while (bench.instants.length < count * PARTS) bench.instants.push(createSiteInstant());
   for (let index = 0; index < season.tracks.length; index++) {
     const measured = (bench.targets[index] ??= createMeasured());
-    setEveningItem(bench.item, season, index, hours);
+    setEveningItem(bench.item, season, site, index, hours);
     measureTarget(bench, season, site, hours, count, bench.item, measured);
   }
 }
@@ -100,14 +110,21 @@ function measureTarget(
   measured: MeasuredTarget,
 ): void {
   resetMeasured(measured);
+  if (!bench.closely && staysLow(season, site, item, hours)) {
+    measured.hindrances.low = count;
+    bench.steps += count;
+    return;
+  }
   const { looks } = bench;
   for (let k = 0; k < count; k++) {
     looks[k] ??= createLook();
     const instant = instantAt(bench, season, site, hours, k * PARTS);
-    lookAt(looks[k]!, season, site, instant, item);
+    lookAt(looks[k]!, season, site, instant, item, bench.closely);
     bench.steps++;
     measured.hindrances[looks[k]!.hindrance]++;
-    if (looks[k]!.hindrance === 'none') considerBest(measured.best, looks[k]!, instant.utcMs);
+    if (looks[k]!.hindrance !== 'none') continue;
+    measured.highestSine = Math.max(measured.highestSine, looks[k]!.sinAltitude);
+    if (bench.closely) considerBest(measured.best, looks[k]!, instant.utcMs);
   }
   const intervals = new IntervalBuilder(measured.edges);
   for (let k = 0; k < count - 1; k++) {
@@ -147,7 +164,7 @@ function measureParts(
     if (part === PARTS) {
       afterOk = bench.looks[k + 1]!.hindrance === 'none';
     } else {
-      lookAt(look, season, site, instantAt(bench, season, site, hours, grid), item);
+      lookAt(look, season, site, instantAt(bench, season, site, hours, grid), item, false);
       bench.steps++;
       afterOk = look.hindrance === 'none';
     }
@@ -173,7 +190,7 @@ function edgeBetween(
   for (let i = 0; i < EDGE_HALVINGS; i++) {
     const middle = (shown + spoiled) / 2;
     setSiteInstant(bench.edgeInstant, season, site, middle);
-    lookAt(bench.edgeLook, season, site, bench.edgeInstant, item);
+    lookAt(bench.edgeLook, season, site, bench.edgeInstant, item, false);
     bench.steps++;
     if (bench.edgeLook.hindrance === 'none') shown = middle;
     else spoiled = middle;
@@ -185,6 +202,7 @@ function edgeBetween(
 function clearOfSkyline(site: PreparedSite, before: Look, after: Look): boolean {
   const lowest = Math.asin(Math.min(before.sinAltitude, after.sinAltitude));
   if (lowest >= site.horizon.highestRad) return true;
+  if (Number.isNaN(before.azimuthRad) || Number.isNaN(after.azimuthRad)) return false;
   return lowest >= highestBetween(site.horizon, before.azimuthRad, after.azimuthRad);
 }
 
@@ -254,6 +272,7 @@ function createMeasured(): MeasuredTarget {
     totalMs: 0,
     shown: false,
     edges: [],
+    highestSine: 0,
     best: { utcMs: NaN, sinAltitude: 0, azimuthRad: 0, luminanceNl: 0, margin: 0 },
     hindrances: { none: 0, low: 0, skyline: 0, sun: 0, faint: 0 },
   };
@@ -263,6 +282,7 @@ function resetMeasured(measured: MeasuredTarget): void {
   measured.totalMs = 0;
   measured.shown = false;
   measured.edges.length = 0;
+  measured.highestSine = 0;
   measured.best.utcMs = NaN;
   const { hindrances } = measured;
   hindrances.none = hindrances.low = hindrances.skyline = hindrances.sun = hindrances.faint = 0;

@@ -10,8 +10,8 @@ export interface EveningShares {
   darkness: number;
   height: number;
   moon: number;
-  /** Figures of the words: mean best altitude of what is shown (rad), minutes of full darkness, … */
-  meanBestAltitudeRad: number;
+  /** Figures of the words: mean of the greatest altitudes of what is shown (rad), minutes of full darkness, … */
+  meanHighestAltitudeRad: number;
   fullyDarkShare: number;
   moonUpShare: number;
   moonHighShare: number;
@@ -33,7 +33,7 @@ const MOON_UP_RAD = -0.83 * DEG;
  *
  * - programme: share of the programme shown, by weight;
  * - darkness: mean over the steps of how far the Sun is down between -6 (none) and -18 degrees (full);
- * - height: mean over what is shown, by weight, of the sine of its altitude when best, full at 60 degrees;
+ * - height: mean over what is shown, by weight, of the sine of its greatest altitude, full at 60 degrees;
  * - moon: wished dark, the share of steps without it, a lit part f counting as 1 - f; welcome, the share of
  *   steps with it above 10 degrees, less when it is nearly full and drowns the rest; indifferent, all.
  *
@@ -53,8 +53,8 @@ export function eveningShares(
     const target = targets[i]!;
     if (!target.shown) return;
     weightShown += weight;
-    height += weight * Math.min(1, target.best.sinAltitude / SIN_HIGH);
-    altitude += weight * Math.asin(target.best.sinAltitude);
+    height += weight * Math.min(1, target.highestSine / SIN_HIGH);
+    altitude += weight * Math.asin(target.highestSine);
   });
   let dark = 0;
   let fullyDark = 0;
@@ -74,7 +74,7 @@ export function eveningShares(
     darkness: dark / count,
     height: weightShown > 0 ? height / weightShown : 0,
     moon: moonShare(season.programme.moon, lit, moonUp / count, moonHigh / count),
-    meanBestAltitudeRad: weightShown > 0 ? altitude / weightShown : 0,
+    meanHighestAltitudeRad: weightShown > 0 ? altitude / weightShown : 0,
     fullyDarkShare: fullyDark / count,
     moonUpShare: moonUp / count,
     moonHighShare: moonHigh / count,

@@ -34,7 +34,7 @@ export function searchBlock(season: Season, block: SearchBlock, weights: ScoreWe
   const bench = createWorkbench();
   const site = prepareSite(block.site);
   const rows = block.dates.map((date): EveningRow => {
-    const { answer, light, score, shown } = figureEvening(bench, season, site, weights, date);
+    const { answer, light, score, shown } = figureEvening(bench, season, site, weights, date, false);
     return {
       site: site.site.name,
       date,

@@ -1,5 +1,13 @@
 import { limitTable, type LimitTable } from '#darkness';
-import { buildTrack, MS_PER_DAY, seasonFrame, type SeasonFrame, type Track } from '#sky';
+import {
+  buildTrack,
+  MS_PER_DAY,
+  perturbersFor,
+  seasonFrame,
+  type SeasonFrame,
+  type Track,
+  withPerturbations,
+} from '#sky';
 import { type Programme, type ProgrammeItem } from './programme';
 
 /**
@@ -24,14 +32,18 @@ export function prepareSeason(programme: Programme, fromDate: string, toDate: st
   const frame = seasonFrame(Date.parse(fromDate) - EDGE_MS, Date.parse(toDate) + EDGE_MS);
   const sun = buildTrack({ kind: 'solarSystem', name: 'Sun', body: 'Sun' }, frame);
   const moon = buildTrack({ kind: 'solarSystem', name: 'Moon', body: 'Moon' }, frame);
+  const targets = programme.items.map(({ target }) => target);
+  const planets = perturbersFor(targets, frame.fromMs, frame.toMs);
   const tables = new Map<string, LimitTable>();
   return {
     programme,
     frame,
     sun,
     moon,
-    tracks: programme.items.map(({ target }) =>
-      target.kind === 'solarSystem' && target.body === 'Moon' ? moon : buildTrack(target, frame),
+    tracks: targets.map((target) =>
+      target.kind === 'solarSystem' && target.body === 'Moon'
+        ? moon
+        : buildTrack(withPerturbations(target, frame.fromMs, frame.toMs, planets), frame),
     ),
     limits: programme.items.map((item) => sharedTable(tables, item)),
   };

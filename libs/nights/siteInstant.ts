@@ -1,4 +1,4 @@
-import { createSkyLight, setSkyLight, type SkyLight } from '#darkness';
+import { brightestSky, createSkyLight, setSkyLight, type SkyLight } from '#darkness';
 import { axialDistances, seasonSidereal, trackPlace, type Track } from '#sky';
 import { type Horizon, prepareHorizon } from './horizon';
 import { type Season } from './season';
@@ -9,6 +9,8 @@ import { type ZoneClock, zoneClock } from './zoneClock';
 export interface PreparedSite {
   readonly site: NightSite;
   readonly horizon: Horizon;
+  /** Sine of the skyline's highest point. */
+  readonly sinHighest: number;
   readonly sinLatitude: number;
   readonly cosLatitude: number;
   readonly fromAxisAu: number;
@@ -18,9 +20,11 @@ export interface PreparedSite {
 
 export function prepareSite(site: NightSite): PreparedSite {
   const { fromAxis, fromEquator } = axialDistances(site.observer);
+  const horizon = prepareHorizon(site.horizon);
   return {
     site,
-    horizon: prepareHorizon(site.horizon),
+    horizon,
+    sinHighest: Math.sin(horizon.highestRad),
     sinLatitude: Math.sin(site.observer.latitudeRad),
     cosLatitude: Math.cos(site.observer.latitudeRad),
     fromAxisAu: fromAxis,
@@ -45,6 +49,8 @@ export interface SiteInstant {
   moonY: number;
   moonZ: number;
   readonly light: SkyLight;
+  /** No sky away from the Moon is brighter, nanolambert; Infinity in twilight. */
+  brightestNl: number;
 }
 
 export function createSiteInstant(): SiteInstant {
@@ -62,6 +68,7 @@ export function createSiteInstant(): SiteInstant {
     moonY: 0,
     moonZ: 0,
     light: createSkyLight(),
+    brightestNl: Infinity,
   };
 }
 
@@ -147,6 +154,7 @@ export function setSiteInstant(
     phase,
     moonDistance,
   );
+  instant.brightestNl = brightestSky(instant.light);
 }
 
 /** Sine of the altitude of a unit vector of the true equator of date. */

@@ -90,7 +90,7 @@ export function partWords(
             : 'Bright twilight or daylight all through the public hours.',
     height:
       shown > 0
-        ? `What is shown stands ${Math.round(toDeg(shares.meanBestAltitudeRad))} degrees high on average at its best.`
+        ? `What is shown stands ${Math.round(toDeg(shares.meanHighestAltitudeRad))} degrees high on average at its highest.`
         : 'Nothing is shown.',
     moon: moonWords(programme, shares, minutes),
   };

@@ -2,6 +2,7 @@ import { angularDiameter, illuminatedFraction, phaseAngle, subLatitude } from '.
 import { type AxisTilt, moonMagnitude, planetMagnitude, smallBodyMagnitude, sunMagnitude } from './magnitude';
 import { KM_PER_AU, type Observer, observerVector } from './observer';
 import { eclipticToEquatorial, heliocentricState, type State } from './orbit';
+import { motionPlace } from './perturbedMotion';
 import { refractionTrueToApparent } from './refraction';
 import {
   earthState,
@@ -68,11 +69,17 @@ export function earthFrame(utcMs: number): EarthFrame {
   return { earth: earthState(utcMs), toDate: j2000ToDate(utcMs) };
 }
 
-/** Heliocentric place of a body, J2000 equator, au: a planet, the Moon, the Sun or a two-body orbit. */
+/**
+ * Heliocentric place of a body, J2000 equator, au: a planet, the Moon, the Sun, or a small body by its
+ * perturbed motion where it carries one and by its two-body orbit where not. Throws a RangeError outside the
+ * span of a motion: a two-body place there would leap away from the rest.
+ */
 export function heliocentric(target: Exclude<SkyTarget, { kind: 'fixed' }>, utcMs: number): Vector {
-  return target.kind === 'solarSystem'
-    ? heliocentricPlace(target.body, utcMs)
-    : eclipticToEquatorial(heliocentricState(target.elements, utcMsToTtJd(utcMs)).position);
+  if (target.kind === 'solarSystem') return heliocentricPlace(target.body, utcMs);
+  const ttJd = utcMsToTtJd(utcMs);
+  return target.motion === undefined
+    ? eclipticToEquatorial(heliocentricState(target.elements, ttJd).position)
+    : motionPlace(target.motion, ttJd);
 }
 
 /**

@@ -1,4 +1,5 @@
 import { type OrbitalElements } from './orbit';
+import { type Motion } from './perturbedMotion';
 import { type SolarBody } from './solarSystem';
 
 /** Total magnitude law of a comet: H + 5 log Delta + 2.5 n log r. */
@@ -25,11 +26,13 @@ export interface SolarSystemTarget {
   readonly body: SolarBody;
 }
 
-/** A comet or asteroid, moving on a conic. */
+/** A comet or asteroid. */
 export interface OrbitTarget {
   readonly kind: 'orbit';
   readonly name: string;
   readonly elements: OrbitalElements;
+  /** Its motion under the planets (withPerturbations); where absent it moves on the conic of its elements. */
+  readonly motion?: Motion;
   readonly brightness: Brightness | null;
   /** Diameter of a comet's coma as it is expected to show, arcmin; 0 for a point. */
   readonly comaArcmin: number;

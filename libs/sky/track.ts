@@ -47,6 +47,7 @@ const FIT = {
 /** Small bodies are halved from 16-day pieces until the fit is this good, radians. */
 const SMALL_BODY_TOLERANCE = toRad(0.05 / 3600);
 const SHORTEST_PIECE_DAYS = 1 / 16;
+const SMALL_BODY_DEGREE = 11;
 
 export function seasonFrame(fromMs: number, toMs: number): SeasonFrame {
   const start = fromMs - MARGIN_MS;
@@ -149,29 +150,48 @@ function fitPlace(target: SkyTarget, frame: SeasonFrame): Chebyshev {
       sample,
     );
   }
-  let days = 16;
-  for (;;) {
-    const tried = fit([days, 11], sample);
-    if (days <= SHORTEST_PIECE_DAYS || worstMiss(tried, sample) <= SMALL_BODY_TOLERANCE) return tried;
-    days /= 2;
+  return fitSmallBody(sample, frame);
+}
+
+/** Pieces of one length, halved until all are good; the season is fitted again only once its hardest part is. */
+function fitSmallBody(sample: Sampler, { fromMs, toMs }: SeasonFrame): Chebyshev {
+  let hardestMs: number | null = null;
+  for (let days = 16; ; days /= 2) {
+    const pieceMs = days * MS_PER_DAY;
+    const isShortest = days <= SHORTEST_PIECE_DAYS;
+    if (hardestMs !== null && !isShortest) {
+      const start = fromMs + Math.floor((hardestMs - fromMs) / pieceMs) * pieceMs;
+      const piece = fitChebyshev(sample, 3, start, start + pieceMs, pieceMs, SMALL_BODY_DEGREE);
+      if (worstMiss(piece, sample).missRad > SMALL_BODY_TOLERANCE) continue;
+    }
+    const tried = fitChebyshev(sample, 3, fromMs, toMs, pieceMs, SMALL_BODY_DEGREE);
+    if (isShortest) return tried;
+    const worst = worstMiss(tried, sample);
+    if (worst.missRad <= SMALL_BODY_TOLERANCE) return tried;
+    hardestMs = worst.utcMs;
   }
 }
 
-/** Largest angle between fit and truth at the ends and two inner points of every piece. */
-function worstMiss(fit: Chebyshev, sample: Sampler): number {
+/** Largest angle between fit and truth at the ends and two inner points of every piece, and when. */
+function worstMiss(fit: Chebyshev, sample: Sampler): { readonly missRad: number; readonly utcMs: number } {
   const truth = new Float64Array(3);
   const fitted = new Float64Array(3);
   let worst = 0;
+  let worstMs = fit.fromMs;
   for (let segment = 0; segment < fit.segments; segment++) {
     for (const part of [0.001, 0.31, 0.69, 0.999]) {
       const utcMs = fit.fromMs + (segment + part) * fit.segmentMs;
       sample(utcMs, truth);
       evaluateChebyshev(fit, utcMs, fitted);
       const miss = Math.hypot(truth[0]! - fitted[0]!, truth[1]! - fitted[1]!, truth[2]! - fitted[2]!);
-      worst = Math.max(worst, miss / Math.hypot(truth[0]!, truth[1]!, truth[2]!));
+      const missRad = miss / Math.hypot(truth[0]!, truth[1]!, truth[2]!);
+      if (missRad > worst) {
+        worst = missRad;
+        worstMs = utcMs;
+      }
     }
   }
-  return worst;
+  return { missRad: worst, utcMs: worstMs };
 }
 
 function earthAt(frame: SeasonFrame): (utcMs: number) => {

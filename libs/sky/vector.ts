@@ -30,6 +30,11 @@ export function unit(a: Vector): Vector {
   return scale(a, 1 / norm(a));
 }
 
+/** What is left of a vector when its part along a unit vector is taken away. */
+export function rejected(a: Vector, along: Vector): Vector {
+  return subtract(a, scale(along, dot(a, along)));
+}
+
 /** Angle between two vectors, radians in [0, π]; exact for small and for nearly opposite directions. */
 export function separation(a: Vector, b: Vector): number {
   return Math.atan2(norm(cross(a, b)), dot(a, b));
