@@ -1,5 +1,5 @@
 import { type Command } from 'commander';
-import { elementState, compareElements, namedTarget } from '#club/sky';
+import { elementState, compareElements, namedTarget, perturbing } from '#club/sky';
 import { parseDesignation, toCheckJson } from '#elements';
 import { BadInput } from './badInput';
 import { runBatch } from './batch';
@@ -16,6 +16,13 @@ interface StateOptions extends JsonOption {
   readonly at?: string;
   readonly twoBody?: boolean;
   readonly batch?: string;
+}
+
+/** The options that a line of a batch may carry too, there as text. */
+interface StateLine {
+  readonly body?: string;
+  readonly at?: string;
+  readonly twoBody?: boolean | string;
 }
 
 interface CompareOptions extends JsonOption {
@@ -54,14 +61,20 @@ export function addElements(program: Command): void {
     .option('--json', 'print JSON')
     .action(async (file: string, options: StateOptions) => {
       const { sets } = elementFile(file);
-      const answer = ({ body, at }: Pick<StateOptions, 'body' | 'at'>) => {
+      const perturbed = perturbing();
+      const answer = ({ body, at, twoBody }: StateLine) => {
         if (body === undefined) {
           throw new BadInput('body', '--body was left out; give the name of a body in the file.');
         }
         if (at === undefined) {
           throw new BadInput('at', '--at was left out; give a TT instant such as 2027-03-01T00:00:00.');
         }
-        return elementState(namedTarget(body, sets), parseTtInstant(at));
+        return elementState(
+          namedTarget(body, sets),
+          parseTtInstant(at),
+          isTwoBody(twoBody ?? options.twoBody),
+          perturbed,
+        );
       };
       if (options.batch !== undefined) {
         const { allGood } = await runBatch(options.batch, ['body', 'at', 'twoBody'], answer);
@@ -94,7 +107,6 @@ export function addElements(program: Command): void {
           designation.problem ?? `${designation.canonical ?? text}, packed ${designation.packed ?? 'none'}`,
         );
       }
-      if (!designation.valid) process.exitCode = 2;
     });
 
   elements
@@ -126,4 +138,10 @@ export function addElements(program: Command): void {
         }
       }
     });
+}
+
+function isTwoBody(value: boolean | string | undefined): boolean {
+  if (value === undefined || value === false || value === 'false') return false;
+  if (value === true || value === 'true') return true;
+  throw new BadInput('twoBody', `twoBody was ${JSON.stringify(value)}; give true or false.`);
 }

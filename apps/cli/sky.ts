@@ -1,6 +1,6 @@
 import { type Command } from 'commander';
 import { extinctionForElevation, type SiteSky, skyFromBortle } from '#darkness';
-import { namedTarget, skyAnswer, type SkyAnswer } from '#club/sky';
+import { namedTarget, perturbing, type Perturbing, skyAnswer, type SkyAnswer } from '#club/sky';
 import { BadInput } from './badInput';
 import { runBatch } from './batch';
 import { elementFile } from './elementFile';
@@ -42,7 +42,10 @@ export function addSky(program: Command): void {
     .option('--json', 'print JSON')
     .action(async (options: SkyOptions) => {
       if (options.batch !== undefined) {
-        const { allGood } = await runBatch(options.batch, BATCH_KEYS, (line) => answerTo(line));
+        const perturbed = perturbing();
+        const { allGood } = await runBatch(options.batch, BATCH_KEYS, (line) =>
+          answerTo(line, null, perturbed),
+        );
         if (!allGood) process.exitCode = 2;
         return;
       }
@@ -68,6 +71,7 @@ async function namedSite({ siteName, db }: SkyOptions): Promise<Stand | null> {
 function answerTo(
   options: Omit<SkyOptions, 'geocentric'> & { readonly geocentric?: boolean | string },
   named: Stand | null = null,
+  perturbed: Perturbing = perturbing(),
 ): SkyAnswer {
   if (options.target === undefined) {
     throw new BadInput('target', '--target was left out; give the name of what is to be seen.');
@@ -79,7 +83,7 @@ function answerTo(
   const sets = options.elements === undefined ? [] : elementFile(options.elements).sets;
   const { sky: target } = namedTarget(options.target, sets);
   const isGeocentric = options.geocentric === true || options.geocentric === 'true';
-  return skyAnswer(target, utcMs, isGeocentric ? null : (named ?? standOf(options)));
+  return skyAnswer(target, utcMs, isGeocentric ? null : (named ?? standOf(options)), perturbed);
 }
 
 function standOf({ site, skyMag, bortle }: Pick<SkyOptions, 'site' | 'skyMag' | 'bortle'>): Stand {

@@ -20,6 +20,7 @@ import {
   type SkyTarget,
   toDeg,
 } from '#sky';
+import { perturbing, type Perturbing } from './perturbing';
 
 /** One target at one instant, in the units of the outside: degrees, au, magnitudes. */
 export interface SkyAnswer {
@@ -61,13 +62,17 @@ const MOON: SkyTarget = { kind: 'solarSystem', name: 'Moon', body: 'Moon' };
 /** Below this distance from a Sun that is up, no instrument is to be pointed (common practice). */
 const SUN_CLEARANCE_DEG = 15;
 
-/** A target seen from a place with its sky at a UTC instant; without a place the geocentric position alone. */
+/**
+ * A target seen from a place with its sky at a UTC instant; without a place the geocentric position alone. A
+ * comet or asteroid moves under the planets; a piece of work over many instants shares one `perturbed`.
+ */
 export function skyAnswer(
   target: SkyTarget,
   utcMs: number,
   from: { readonly observer: Observer; readonly sky: SiteSky } | null,
+  perturbed: Perturbing = perturbing(),
 ): SkyAnswer {
-  const seen = place(target, utcMs, from?.observer ?? null);
+  const seen = place(perturbed(target, utcMs), utcMs, from?.observer ?? null);
   const { astrometric, apparent, horizontal } = seen;
   const common = {
     target: target.name,
