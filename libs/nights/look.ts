@@ -88,11 +88,11 @@ export function setEveningItem(
   index: number,
   hours: PublicHours,
 ): void {
-  const { leastAltitudeRad } = season.programme.items[index]!;
+  const { leastAltitudeRad, target } = season.programme.items[index]!;
   const track = season.tracks[index]!;
   const length = hours.endMs - hours.startMs;
   item.index = index;
-  item.isMoon = track === season.moon;
+  item.isMoon = target.kind === 'solarSystem' && target.body === 'Moon';
   item.nearby = track.nearby;
   item.sinLeastAltitude = Math.sin(leastAltitudeRad);
   item.magnitude = trackMagnitude(track, hours.startMs + length / 2);

@@ -5,6 +5,7 @@ import {
   perturbersFor,
   seasonFrame,
   type SeasonFrame,
+  type SkyTarget,
   type Track,
   withPerturbations,
 } from '#sky';
@@ -14,12 +15,19 @@ import { type Programme, type ProgrammeItem } from './programme';
  * All that a programme's season needs, computed once and shared by every site, evening and step. Plain data:
  * it crosses to a worker as it is.
  */
-export interface Season {
+export interface Season extends SeasonSky, SeasonItems {
   readonly programme: Programme;
+}
+
+/** The part of a season that does not depend on its programme. */
+export interface SeasonSky {
   readonly frame: SeasonFrame;
   readonly sun: Track;
   readonly moon: Track;
-  /** One an item of the programme, in its order. */
+}
+
+/** The part of a season that some items of its programme need, in their order. */
+export interface SeasonItems {
   readonly tracks: readonly Track[];
   readonly limits: readonly LimitTable[];
 }
@@ -29,24 +37,35 @@ const EDGE_MS = 2 * MS_PER_DAY;
 
 /** Prepares a programme for all evenings from one date to another, 'YYYY-MM-DD', both included. */
 export function prepareSeason(programme: Programme, fromDate: string, toDate: string): Season {
+  const sky = prepareSky(fromDate, toDate);
+  return { programme, ...sky, ...prepareItems(sky, programme.items) };
+}
+
+/** Frame, Sun and Moon of all evenings from one date to another, 'YYYY-MM-DD', both included. */
+export function prepareSky(fromDate: string, toDate: string): SeasonSky {
   const frame = seasonFrame(Date.parse(fromDate) - EDGE_MS, Date.parse(toDate) + EDGE_MS);
-  const sun = buildTrack({ kind: 'solarSystem', name: 'Sun', body: 'Sun' }, frame);
-  const moon = buildTrack({ kind: 'solarSystem', name: 'Moon', body: 'Moon' }, frame);
-  const targets = programme.items.map(({ target }) => target);
+  return {
+    frame,
+    sun: buildTrack({ kind: 'solarSystem', name: 'Sun', body: 'Sun' }, frame),
+    moon: buildTrack({ kind: 'solarSystem', name: 'Moon', body: 'Moon' }, frame),
+  };
+}
+
+/** Tracks and limits of items; the work that workers can share out. */
+export function prepareItems({ frame, moon }: SeasonSky, items: readonly ProgrammeItem[]): SeasonItems {
+  const targets = items.map(({ target }) => target);
   const planets = perturbersFor(targets, frame.fromMs, frame.toMs);
   const tables = new Map<string, LimitTable>();
   return {
-    programme,
-    frame,
-    sun,
-    moon,
     tracks: targets.map((target) =>
-      target.kind === 'solarSystem' && target.body === 'Moon'
-        ? moon
-        : buildTrack(withPerturbations(target, frame.fromMs, frame.toMs, planets), frame),
+      isMoon(target) ? moon : buildTrack(withPerturbations(target, frame.fromMs, frame.toMs, planets), frame),
     ),
-    limits: programme.items.map((item) => sharedTable(tables, item)),
+    limits: items.map((item) => sharedTable(tables, item)),
   };
+}
+
+function isMoon(target: SkyTarget): boolean {
+  return target.kind === 'solarSystem' && target.body === 'Moon';
 }
 
 /** Targets of one size in one instrument share a table. */

@@ -76,6 +76,17 @@ const place = new Float64Array(3);
 
 /** Airless topocentric altitude of a track's body at a site, radians; allocates nothing. */
 export function trackAltitude(track: Track, season: Season, site: PreparedSite, utcMs: number): number {
+  return limbAltitude(track, season, site, 0, utcMs);
+}
+
+/** The same of the upper limb of a body of some radius in au. */
+export function limbAltitude(
+  track: Track,
+  season: Season,
+  site: PreparedSite,
+  radiusAu: number,
+  utcMs: number,
+): number {
   const sidereal = seasonSidereal(season.frame, utcMs) + site.site.observer.longitudeRad;
   const cos = Math.cos(sidereal);
   const sin = Math.sin(sidereal);
@@ -84,18 +95,8 @@ export function trackAltitude(track: Track, season: Season, site: PreparedSite, 
   const across = cos * place[1]! - sin * place[0]!;
   const north = place[2]! - site.fromEquatorAu;
   const up = site.cosLatitude * along + site.sinLatitude * north;
-  return Math.asin(up / Math.sqrt(along * along + across * across + north * north));
-}
-
-/** Topocentric distance of a track's body from a site, au. */
-export function trackDistance(track: Track, season: Season, site: PreparedSite, utcMs: number): number {
-  const sidereal = seasonSidereal(season.frame, utcMs) + site.site.observer.longitudeRad;
-  trackPlace(track, utcMs, place);
-  return Math.hypot(
-    place[0]! - site.fromAxisAu * Math.cos(sidereal),
-    place[1]! - site.fromAxisAu * Math.sin(sidereal),
-    place[2]! - site.fromEquatorAu,
-  );
+  const distance = Math.sqrt(along * along + across * across + north * north);
+  return Math.asin(up / distance) + Math.asin(radiusAu / distance);
 }
 
 /** Fills `instant` for a site and a UTC instant inside the season; allocates nothing. */

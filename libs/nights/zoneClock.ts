@@ -12,8 +12,19 @@ export interface ZoneClock {
   readonly offsetMinutes: (utcMs: number) => number;
 }
 
+/** Clocks already made: the rules of a zone do not change while the program runs. */
+const clocks = new Map<string, ZoneClock>();
+
 /** The clock of an IANA zone, which must exist. */
 export function zoneClock(zone: string): ZoneClock {
+  const known = clocks.get(zone);
+  if (known !== undefined) return known;
+  const made = makeClock(zone);
+  clocks.set(zone, made);
+  return made;
+}
+
+function makeClock(zone: string): ZoneClock {
   const rules = IANAZone.create(zone);
   const noons = new Map<string, number>();
   const offsetMinutes = (utcMs: number) => rules.offset(utcMs);

@@ -37,12 +37,12 @@ export interface SeasonFrame {
 const MARGIN_MS = 2 * MS_PER_DAY;
 /** Piece length in days and degree of each body's fit; a test holds all to 0.1 arcsec of `place`. */
 const FIT = {
-  frame: [8, 11],
-  Moon: [2, 11],
-  Sun: [16, 11],
-  Mercury: [8, 10],
-  planet: [16, 11],
-  fixed: [16, 9],
+  frame: [8, 9],
+  Moon: [2, 8],
+  Sun: [16, 8],
+  Mercury: [8, 8],
+  planet: [16, 8],
+  fixed: [16, 7],
 } as const;
 /** Small bodies are halved from 16-day pieces until the fit is this good, radians. */
 const SMALL_BODY_TOLERANCE = toRad(0.05 / 3600);

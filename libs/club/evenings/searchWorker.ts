@@ -3,19 +3,26 @@ import {
   createWorkbench,
   type JudgedEvening,
   judgeEvening,
-  prepareSeason,
+  prepareItems,
   prepareSite,
-  type Programme,
+  prepareSky,
+  type ProgrammeItem,
   type ScoreWeights,
   type SearchBlock,
   searchBlock,
   type Season,
+  type SeasonItems,
+  type SeasonSky,
 } from '#nights';
 
-export interface PrepareTask {
-  readonly programme: Programme;
+export interface SkyTask {
   readonly from: string;
   readonly to: string;
+}
+
+export interface ItemsTask {
+  readonly sky: SeasonSky;
+  readonly items: readonly ProgrammeItem[];
 }
 
 export interface BlockTask {
@@ -24,9 +31,14 @@ export interface BlockTask {
   readonly weights: ScoreWeights;
 }
 
-/** Runs in a worker thread: the tracks of a season. */
-export function prepare({ programme, from, to }: PrepareTask): Season {
-  return prepareSeason(programme, from, to);
+/** Runs in a worker thread: what a season has without its programme. */
+export function skyOfSeason({ from, to }: SkyTask): SeasonSky {
+  return prepareSky(from, to);
+}
+
+/** Runs in a worker thread: tracks and limits of some items of a programme. */
+export function itemsOfSeason({ sky, items }: ItemsTask): SeasonItems {
+  return prepareItems(sky, items);
 }
 
 /** Runs in a worker thread: one stretch of evenings at one site. */

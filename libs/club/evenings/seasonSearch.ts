@@ -15,9 +15,11 @@ import {
   type ScoreWeights,
   type SearchBlock,
   type Season,
+  type SeasonItems,
+  type SeasonSky,
   whyClosed,
 } from '#nights';
-import { type BlockTask, type PrepareTask } from './searchWorker';
+import { type BlockTask, type ItemsTask, type SkyTask } from './searchWorker';
 import { searchPool } from './workerPool';
 
 /** A season to search: what is promised, where, and on which dates. */
@@ -65,6 +67,8 @@ export interface Ranking {
 
 /** Evenings in one unit of work: long enough to be worth sending, short enough to show progress. */
 const BLOCK_EVENINGS = 46;
+/** Items whose tracks are computed in one go: what they share (planets' table, limits) is worth some. */
+const ITEMS_AT_ONCE = 10;
 
 /** Ranks every open evening of a season over all its sites, in the worker pool. */
 export async function searchSeason(search: SeasonSearch, watch: SearchWatch = {}): Promise<Ranking> {
@@ -87,8 +91,8 @@ export async function searchSeason(search: SeasonSearch, watch: SearchWatch = {}
     return chunks(open, BLOCK_EVENINGS).map((part) => ({ site, dates: part }));
   });
   const total = blocks.reduce((sum, block) => sum + block.dates.length, 0);
-  const { programme, from, to, weights } = search;
-  const season = await inWorker<Season>('prepare', { programme, from, to } satisfies PrepareTask);
+  const { weights } = search;
+  const season = await preparedSeason(search, inWorker);
 
   let done = 0;
   watch.onProgress?.(done, total);
@@ -118,6 +122,24 @@ export async function searchSeason(search: SeasonSearch, watch: SearchWatch = {}
     rows,
     closed,
     habit: habit === null ? null : habitCost(habitWords(habit), rows, habitDates(habit, dates)),
+  };
+}
+
+type InWorker = <Result>(name: string, task: unknown) => Promise<Result>;
+
+/** The season's tracks, shared out among the workers. */
+async function preparedSeason({ programme, from, to }: SeasonSearch, inWorker: InWorker): Promise<Season> {
+  const sky = await inWorker<SeasonSky>('skyOfSeason', { from, to } satisfies SkyTask);
+  const parts = await Promise.all(
+    chunks(programme.items, ITEMS_AT_ONCE).map((items) =>
+      inWorker<SeasonItems>('itemsOfSeason', { sky, items } satisfies ItemsTask),
+    ),
+  );
+  return {
+    programme,
+    ...sky,
+    tracks: parts.flatMap(({ tracks }) => tracks),
+    limits: parts.flatMap(({ limits }) => limits),
   };
 }
 
