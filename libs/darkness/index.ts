@@ -27,5 +27,11 @@ export {
   visibilityMargin,
   type VisibleObject,
 } from './visibility';
-export { brightestSkyShowing, type LimitTable, limitFromTable, limitTable } from './limitTable';
-export { brightestSky, COS_MOON_CLEARANCE } from './brightestSky';
+export {
+  brightestSkyShowing,
+  darkestSkyHiding,
+  type LimitTable,
+  limitFromTable,
+  limitTable,
+} from './limitTable';
+export { brightestSky, COS_MOON_CLEARANCE, darkestSky } from './brightestSky';

@@ -7,6 +7,8 @@ export interface LimitTable {
   readonly limits: Float64Array;
   /** The least of each limit and those against all darker skies. */
   readonly leastFrom: Float64Array;
+  /** The greatest of each limit and those against all brighter skies. */
+  readonly mostTo: Float64Array;
 }
 
 const BRIGHTEST = 1.5;
@@ -31,7 +33,9 @@ export function limitTable(
   for (let i = 0; i <= LAST; i++) limits[i] = bestViewLimit(views, BRIGHTEST + i / PER_MAGNITUDE, areaSr);
   const leastFrom = limits.slice();
   for (let i = LAST - 1; i >= 0; i--) leastFrom[i] = Math.min(leastFrom[i]!, leastFrom[i + 1]!);
-  return { limits, leastFrom };
+  const mostTo = limits.slice();
+  for (let i = 1; i <= LAST; i++) mostTo[i] = Math.max(mostTo[i]!, mostTo[i - 1]!);
+  return { limits, leastFrom, mostTo };
 }
 
 /**
@@ -64,4 +68,22 @@ export function brightestSkyShowing(table: LimitTable, magnitude: number): numbe
   }
   // A hair darker, so that rounding of the logarithm cannot put it on the wrong side of the step.
   return magToLuminance(BRIGHTEST + low / PER_MAGNITUDE) * (1 - 1e-12);
+}
+
+/**
+ * A sky in nanolambert such that an object of this magnitude (extinction included) shows neither against it
+ * nor against any brighter one by the table: the darkest such sky but for one step, or Infinity where there
+ * is none.
+ */
+export function darkestSkyHiding(table: LimitTable, magnitude: number): number {
+  const { mostTo } = table;
+  if (!(mostTo[0]! < magnitude)) return Infinity;
+  let low = 0;
+  let high = LAST;
+  while (low < high) {
+    const middle = (low + high + 1) >> 1;
+    if (mostTo[middle]! < magnitude) low = middle;
+    else high = middle - 1;
+  }
+  return magToLuminance(BRIGHTEST + low / PER_MAGNITUDE) * (1 + 1e-12);
 }

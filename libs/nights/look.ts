@@ -1,4 +1,11 @@
-import { airmass, brightestSkyShowing, COS_MOON_CLEARANCE, limitFromTable, skyLuminance } from '#darkness';
+import {
+  airmass,
+  brightestSkyShowing,
+  COS_MOON_CLEARANCE,
+  darkestSkyHiding,
+  limitFromTable,
+  skyLuminance,
+} from '#darkness';
 import { refractionTrueToApparent, toRad, trackMagnitude, trackPlace } from '#sky';
 import { horizonAltitude } from './horizon';
 import { type PublicHours } from './hours';
@@ -56,6 +63,8 @@ export interface EveningItem {
   magnitude: number;
   /** It shows, even at its least altitude, against this sky (nanolambert) and every darker one. */
   darkEnoughNl: number;
+  /** It does not show, even overhead, against this sky and any brighter one. */
+  tooBrightNl: number;
   /** The geocentric place over the public hours: a cubic in the share of them passed, four numbers an axis. */
   readonly path: Float64Array;
   startMs: number;
@@ -70,6 +79,7 @@ export function createEveningItem(): EveningItem {
     sinLeastAltitude: 0,
     magnitude: NaN,
     darkEnoughNl: 0,
+    tooBrightNl: Infinity,
     path: new Float64Array(12),
     startMs: 0,
     perMs: 0,
@@ -96,8 +106,10 @@ export function setEveningItem(
   item.nearby = track.nearby;
   item.sinLeastAltitude = Math.sin(leastAltitudeRad);
   item.magnitude = trackMagnitude(track, hours.startMs + length / 2);
-  const thickest = site.site.sky.extinctionMagPerAirmass * airmassOfSine(item.sinLeastAltitude);
+  const { extinctionMagPerAirmass } = site.site.sky;
+  const thickest = extinctionMagPerAirmass * airmassOfSine(item.sinLeastAltitude);
   item.darkEnoughNl = brightestSkyShowing(season.limits[index]!, item.magnitude + thickest);
+  item.tooBrightNl = darkestSkyHiding(season.limits[index]!, item.magnitude + extinctionMagPerAirmass);
   item.startMs = hours.startMs;
   item.perMs = 1 / length;
   for (let k = 0; k < 4; k++) {
@@ -121,7 +133,7 @@ export function setEveningItem(
  * site's skyline, clear of the Sun while that is up, and bright enough for its instrument against the sky.
  * Heights are airless, so that what is called clear of the skyline is so in any air. Allocates nothing.
  *
- * @param closely also works out sky and margin where a bound shows already that there is margin; the
+ * @param closely also works out sky and margin where bounds show already whether there is margin; the
  * hindrance is the same either way
  */
 export function lookAt(
@@ -173,9 +185,15 @@ export function lookAt(
   }
   // The Moon stands in its own glare; the sky a quarter turn off is what it is seen against.
   const cosMoon = item.isMoon ? 0 : x * instant.moonX + y * instant.moonY + z * instant.moonZ;
-  if (!closely && instant.brightestNl <= item.darkEnoughNl && cosMoon <= COS_MOON_CLEARANCE) {
-    look.hindrance = 'none';
-    return;
+  if (!closely) {
+    if (instant.darkestNl >= item.tooBrightNl) {
+      look.hindrance = 'faint';
+      return;
+    }
+    if (instant.brightestNl <= item.darkEnoughNl && cosMoon <= COS_MOON_CLEARANCE) {
+      look.hindrance = 'none';
+      return;
+    }
   }
   if (Number.isNaN(bearing)) {
     bearing = azimuth(site, instant, x, y, z);

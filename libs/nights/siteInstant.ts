@@ -1,4 +1,4 @@
-import { brightestSky, createSkyLight, setSkyLight, type SkyLight } from '#darkness';
+import { brightestSky, createSkyLight, darkestSky, setSkyLight, type SkyLight } from '#darkness';
 import { axialDistances, seasonSidereal, trackPlace, type Track } from '#sky';
 import { type Horizon, prepareHorizon } from './horizon';
 import { type Season } from './season';
@@ -49,8 +49,10 @@ export interface SiteInstant {
   moonY: number;
   moonZ: number;
   readonly light: SkyLight;
-  /** No sky away from the Moon is brighter, nanolambert; Infinity in twilight. */
+  /** No sky away from the Moon is brighter, nanolambert. */
   brightestNl: number;
+  /** No sky anywhere is darker, nanolambert. */
+  darkestNl: number;
 }
 
 export function createSiteInstant(): SiteInstant {
@@ -69,6 +71,7 @@ export function createSiteInstant(): SiteInstant {
     moonZ: 0,
     light: createSkyLight(),
     brightestNl: Infinity,
+    darkestNl: 0,
   };
 }
 
@@ -156,6 +159,7 @@ export function setSiteInstant(
     moonDistance,
   );
   instant.brightestNl = brightestSky(instant.light);
+  instant.darkestNl = darkestSky(instant.light);
 }
 
 /** Sine of the altitude of a unit vector of the true equator of date. */
