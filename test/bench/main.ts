@@ -1,9 +1,10 @@
 import { benchChart } from './chart';
 import { type Measurement } from './measurement';
+import { benchPacket } from './packet';
 import { benchSeason } from './season';
 import { benchSkyCold } from './skyCold';
 import { benchStarts } from './starts';
-import { benchFixedTracks } from './tracks';
+import { benchFixedTracks, benchPerturbedTracks } from './tracks';
 
 /** What is measured, by the names it gives. Starting fresh clones takes minutes and is run when named. */
 const benches: readonly {
@@ -13,8 +14,10 @@ const benches: readonly {
 }[] = [
   { names: ['season-search', 'season-altitudes', 'season-memory'], run: benchSeason },
   { names: ['track-fixed-bodies'], run: benchFixedTracks },
+  { names: ['track-perturbed'], run: benchPerturbedTracks },
   { names: ['sky-cold'], run: benchSkyCold },
   { names: ['chart-warm'], run: benchChart },
+  { names: ['packet', 'packet-memory'], run: benchPacket },
   { names: ['first-start', 'second-start'], byName: true, run: benchStarts },
 ];
 

@@ -1,5 +1,6 @@
 import { buildTrack, place, seasonFrame, SOLAR_BODIES, type SkyTarget } from '#sky';
 import { galaxy } from '../../libs/nights/fixtures';
+import { benchPerturbedTrack } from './perturbed';
 import { measurement, type Measurement, median, timed } from './measurement';
 
 const DAY_MS = 86_400_000;
@@ -31,6 +32,21 @@ export function benchFixedTracks(): Promise<Measurement[]> {
       'a place every 5 minutes of the year, worked out one by one',
       perPlace * steps,
       `${targets.length} bodies over 365 days`,
+    ),
+  ]);
+}
+
+/** A season's track of a body moving under the planets, beside its two-body track. */
+export function benchPerturbedTracks(): Promise<Measurement[]> {
+  const { milliseconds, slowestMilliseconds, tableMilliseconds, twoBodyMilliseconds } = benchPerturbedTrack();
+  return Promise.resolve([
+    measurement(
+      'track-perturbed',
+      milliseconds,
+      'ms',
+      'the same body on its two-body orbit',
+      twoBodyMilliseconds,
+      `median body; slowest ${slowestMilliseconds.toFixed(1)} ms; the planets' table that a season shares ${tableMilliseconds.toFixed(1)} ms`,
     ),
   ]);
 }

@@ -1,9 +1,8 @@
-import { checked, type Database, EveningInput, judgeEvening } from '#club';
+import { checked, type Database, EveningInput, type EveningJson, eveningJson, judgeEvening } from '#club';
 import { Controller, Get, Query } from '@nestjs/common';
 import { ApiOperation, ApiTags } from '@nestjs/swagger';
 import { createZodDto } from 'nestjs-zod';
 import { OpenDatabase } from '../database';
-import { eveningJson, type EveningJson } from './eveningJson';
 
 class EveningQuery extends createZodDto(EveningInput) {}
 

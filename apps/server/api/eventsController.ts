@@ -16,7 +16,7 @@ import { createZodDto } from 'nestjs-zod';
 import { OpenDatabase } from '../database';
 import { type Reply } from '../http';
 import { created } from './created';
-import { eventJson, type EventJson } from './eveningJson';
+import { eventJson, type EventJson } from './eventJson';
 
 class EventBody extends createZodDto(EventInput) {}
 class EventChangeBody extends createZodDto(EventChange) {}

@@ -6,5 +6,5 @@ export {
   type SeasonSearch,
   type SearchWatch,
 } from './seasonSearch';
-export { toNightsJson, type NightsJson } from './nightsJson';
+export { type EveningJson, eveningJson, type NightsJson, toNightsJson } from './nightsJson';
 export { closeSearchPool } from './workerPool';

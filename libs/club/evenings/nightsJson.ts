@@ -4,7 +4,7 @@ import { type Ranking } from './seasonSearch';
 /** A ranking as other programs read it: instants as ISO UTC. */
 export interface NightsJson {
   readonly searched: Ranking['searched'];
-  readonly evenings: readonly ReturnType<typeof eveningJson>[];
+  readonly evenings: readonly EveningJson[];
   readonly closed: Ranking['closed'];
   readonly habit: Ranking['habit'];
 }
@@ -13,7 +13,11 @@ export function toNightsJson({ searched, evenings, closed, habit }: Ranking): Ni
   return { searched, evenings: evenings.map(eveningJson), closed, habit };
 }
 
-function eveningJson({ publicHours, showings, ...evening }: JudgedEvening) {
+/** One judged evening as other programs read it. */
+export type EveningJson = ReturnType<typeof eveningJson>;
+
+/** One judged evening, instants as ISO UTC. */
+export function eveningJson({ publicHours, showings, ...evening }: JudgedEvening) {
   return {
     ...evening,
     publicHours: publicHours && { start: iso(publicHours.startMs), end: iso(publicHours.endMs) },

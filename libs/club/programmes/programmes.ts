@@ -22,8 +22,16 @@ export async function createProgramme(database: Database, input: ProgrammeInput)
     refuseTakenName(await names(tx, club), fields.name, 'programme');
     const now = database.now();
     const items = await itemRows(tx, club, fields.items);
+    const position = await tx.programme.count({ where: { clubId: club } });
     const row = await tx.programme.create({
-      data: { clubId: club, ...columns(fields), items: { create: items }, createdAt: now, updatedAt: now },
+      data: {
+        clubId: club,
+        position,
+        ...columns(fields),
+        items: { create: items },
+        createdAt: now,
+        updatedAt: now,
+      },
       include: programmeParts,
     });
     return programmeView(row);
@@ -61,7 +69,7 @@ export async function listProgrammes(database: Database): Promise<readonly Progr
   const rows = await database.client.programme.findMany({
     where: { clubId: await clubId(database.client) },
     include: programmeParts,
-    orderBy: [{ createdAt: 'asc' }, { name: 'asc' }],
+    orderBy: [{ position: 'asc' }, { name: 'asc' }],
   });
   return rows.map(programmeView);
 }
@@ -107,7 +115,7 @@ function names(client: Prisma.TransactionClient, club: string) {
   return client.programme.findMany({
     where: { clubId: club },
     select: { id: true, name: true },
-    orderBy: [{ createdAt: 'asc' }, { name: 'asc' }],
+    orderBy: [{ position: 'asc' }, { name: 'asc' }],
   });
 }
 
