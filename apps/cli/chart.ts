@@ -91,10 +91,15 @@ async function standOf(
   site: string | undefined,
   siteName: string | undefined,
   zone: string | undefined,
-): Promise<Pick<ChartOrder, 'observer' | 'zone' | 'siteName'>> {
+): Promise<Pick<ChartOrder, 'observer' | 'zone' | 'siteName' | 'skyline'>> {
   if (siteName !== undefined) {
     const found = await siteFromDatabase(db, siteName);
-    return { observer: found.observer, zone: zone ?? found.zone, siteName: found.name };
+    return {
+      observer: found.observer,
+      zone: zone ?? found.zone,
+      siteName: found.name,
+      skyline: found.horizon,
+    };
   }
   if (site === undefined) {
     throw new BadInput(

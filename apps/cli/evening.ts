@@ -5,6 +5,7 @@ import { BadInput } from './badInput';
 import { runBatch } from './batch';
 import { parseDate, parsePlace, zoneOf } from './options';
 import { print, printJson } from './output';
+import { siteFromDatabase } from './siteFromDatabase';
 
 interface EveningOptions {
   readonly site?: string;
@@ -34,17 +35,11 @@ export function addEvening(program: Command): void {
         return;
       }
       const { siteName } = options;
-      const named = siteName === undefined ? null : await namedSite(options.db, siteName);
+      const named = siteName === undefined ? null : await siteFromDatabase(options.db, siteName);
       const answer = answerTo(options, named);
       if (options.json === true) printJson(answer);
       else print(await inWords(answer));
     });
-}
-
-async function namedSite(db: string | undefined, name: string) {
-  // Loaded only here: a place on the command line needs no database.
-  const { siteFromDatabase } = await import('./siteFromDatabase.js');
-  return siteFromDatabase(db, name);
 }
 
 function answerTo(

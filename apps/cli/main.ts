@@ -20,6 +20,9 @@ const commands: Readonly<Record<string, (program: Command) => Promise<void>>> = 
   chart: async (program) => {
     (await import('./chart.js')).addChart(program);
   },
+  packet: async (program) => {
+    (await import('./packet.js')).addPacket(program);
+  },
   calendar: async (program) => {
     (await import('./calendar.js')).addCalendar(program);
   },

@@ -6,6 +6,7 @@ import { runBatch } from './batch';
 import { elementFile } from './elementFile';
 import { parseInstant, parseNumber, parsePlace, type PlaceOption } from './options';
 import { print, printJson } from './output';
+import { siteFromDatabase } from './siteFromDatabase';
 
 interface SkyOptions {
   readonly target?: string;
@@ -63,7 +64,6 @@ interface Stand {
 
 async function namedSite({ siteName, db }: SkyOptions): Promise<Stand | null> {
   if (siteName === undefined) return null;
-  const { siteFromDatabase } = await import('./siteFromDatabase.js');
   const { observer, sky } = await siteFromDatabase(db, siteName);
   return { observer, sky };
 }

@@ -89,6 +89,17 @@ describe('nights', () => {
   });
 });
 
+describe('sky and evening', () => {
+  it('take a site of the database with its own sky and zone', () => {
+    const at = ['--site-name', 'Hollin Top', '--db', database];
+    expect(answer(['sky', '--target', 'M 42', ...at, '--at', '2027-01-09T20:00:00Z'])).toMatchObject({
+      target: 'M 42',
+      constellation: 'Ori',
+    });
+    expect(answer(['evening', ...at, '--date', '2027-01-09'])).toMatchObject({ zone: 'Europe/Madrid' });
+  });
+});
+
 describe('chart', () => {
   it('writes PDF and SVG, and prints the scene', () => {
     const at = ['--site-name', 'Hollin Top', '--db', database, '--at', '2027-01-09T20:00:00Z'];
