@@ -4,6 +4,8 @@ import { parseDesignation, toCheckJson } from '#elements';
 import { BadInput } from './badInput';
 import { runBatch } from './batch';
 import { elementFile } from './elementFile';
+import { addElementsLoad } from './elementsLoad';
+import { addElementsTrust } from './elementsTrust';
 import { parseInstant, parsePlace, parseTtInstant } from './options';
 import { print, printJson, say } from './output';
 
@@ -130,14 +132,19 @@ export function addElements(program: Command): void {
       );
       if (json === true) printJson(shifts);
       else {
-        for (const { body, shiftArcsec, positionAngleDeg, magnitudeChange } of shifts.bodies) {
+        for (const { body, scales, ...shift } of shifts.bodies) {
+          const { shiftArcsec, positionAngleDeg, direction, magnitudeChange } = shift;
           print(
-            `${body}: ${shiftArcsec.toFixed(1)} arcsec towards position angle ${positionAngleDeg.toFixed(0)} degrees` +
+            `${body}: ${shiftArcsec.toFixed(1)} arcsec towards the ${direction} (position angle ${positionAngleDeg.toFixed(0)} degrees)` +
               (magnitudeChange === null ? '' : `; ${magnitudeChange.toFixed(2)} mag`),
           );
+          for (const { words } of scales) print(`  ${words}`);
         }
       }
     });
+
+  addElementsTrust(elements);
+  addElementsLoad(elements);
 }
 
 function isTwoBody(value: boolean | string | undefined): boolean {

@@ -12,6 +12,7 @@ import { DATABASE } from './database';
 import { FeedController } from './feed/feedController';
 import { KeptFeeds } from './feed/keptFeeds';
 import { AssetsController } from './pages/assetsController';
+import { KeptNotes } from './pages/keptNotes';
 import { PagesController } from './pages/pagesController';
 import { SeasonPages } from './pages/seasonPages';
 import { SearchesController } from './searches/searchesController';
@@ -40,6 +41,7 @@ export class ServerModule {
       providers: [
         { provide: DATABASE, useValue: database },
         { provide: KeptFeeds, useFactory: () => new KeptFeeds(database) },
+        { provide: KeptNotes, useFactory: () => new KeptNotes(database) },
         { provide: SearchJobs, useFactory: () => new SearchJobs(database) },
         { provide: SeasonPages, useFactory: () => new SeasonPages(database) },
       ],

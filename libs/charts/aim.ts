@@ -5,6 +5,7 @@ import { type Plate, plateIn } from './plate';
 import { projectionAbout, type ProjectionKind, type SkyPoint } from './projection';
 import { ChartProblem, type ChartRequest, type ChartTarget } from './request';
 import type { Frame } from './scene';
+import type { SkylinePoint } from './skyline';
 import { type Standing, standingUnder } from './standing';
 
 const degree = Math.PI / 180;
@@ -53,7 +54,12 @@ function standingCentre(target: ChartTarget, sky: LocalSky, plate: Plate): SkyPo
  * The ground and compass of an eye chart.
  * @throws ChartProblem where the target is below the horizon.
  */
-export function standingFor(sky: LocalSky, plate: Plate, target: ChartTarget): Standing {
+export function standingFor(
+  sky: LocalSky,
+  plate: Plate,
+  target: ChartTarget,
+  skyline: readonly SkylinePoint[],
+): Standing {
   const { altitudeRad, azimuthRad } = sky.altAz(target);
   if (altitudeRad < 0) {
     const below = (-altitudeRad / degree).toFixed(1);
@@ -63,5 +69,5 @@ export function standingFor(sky: LocalSky, plate: Plate, target: ChartTarget): S
       `${target.name} stands ${below} degrees below the horizon at that time; choose a time when it is up`,
     );
   }
-  return standingUnder(sky, plate, azimuthRad);
+  return standingUnder(sky, plate, azimuthRad, skyline);
 }

@@ -1,27 +1,44 @@
 import type { ConstellationFigure, DeepSkyObject, StarCatalogue } from '#catalogue';
 import { plateFor, standingFor } from './aim';
-import { isLarge, objectsFor, outline } from './deepSky';
-import { starAt, starsFor } from './drawnStars';
+import { isLarge, objectsFor, outline, type PlacedObject, type SymbolSize } from './deepSky';
+import { type DrawnStar, starAt, starsFor } from './drawnStars';
 import { localSky, positionAngle } from './horizon';
-import { fieldWords, instrumentLines, isZenithUp } from './instrument';
-import { constellationWishes, labelRank, objectWishes, starWishes } from './labelWords';
-import { type ChartRequest, type ChartTarget, checkRequest } from './request';
-import type { Frame, Mark, Scene, SheetPoint } from './scene';
+import { companionMarks, isResolved } from './companion';
+import { describe } from './describe';
+import { frameMark } from './frameMark';
+import { drawInset, insetSize } from './insetBox';
+import { instrumentLines, isZenithUp } from './instrument';
+import { constellationWishes, objectWishes, starWishes } from './labelWords';
+import { type ChartRequest, checkRequest } from './request';
+import { placeHours } from './publicHours';
+import type { Mark, Scene, SheetPoint } from './scene';
 import { sceneStars } from './sceneStars';
+import type { Plate } from './plate';
 import { layOut } from './sheet';
-import { type SymbolKind, symbolMarks } from './symbols';
+import { doubleStrokeMm, type SymbolKind, symbolMarks } from './symbols';
 import { targetMark } from './targetMark';
 import { isBehindDisc, targetSymbol } from './targetSymbol';
 import { dotDiameterMm } from './dots';
 import { figureLines, figureMarks } from './figures';
 import { drawKey } from './key';
-import { type Disc, type LabelWish, placeLabels, spotsAround, spotsBeside } from './labels';
+import { type Disc, type LabelWish, placeLabels } from './labels';
+import { placeTail } from './tail';
+import { isStarKind, pathWish, targetWish } from './targetWishes';
+import { phaseMarks } from './phase';
+import { sheetAngle } from './orientation';
+import { insetOn } from './insetOn';
+import { leaderMarks } from './leader';
 import { nextFrame } from './nextFrame';
 import { placePath } from './path';
+import { wayFor } from './wayFor';
+import { placeWay } from './wayMarks';
 
 const degree = Math.PI / 180;
 /** A larger target's ring would be lost at the chart's edge; it gets a small one at its middle instead. */
 const largestRingedMm = 12;
+
+/** The strip under the chart is this high unless what it has to explain needs more, millimetres. */
+const usualKeyMm = 24;
 
 /**
  * The sheet of one target at one scale: where everything stands, in millimetres.
@@ -34,18 +51,40 @@ export function buildScene(
   request: ChartRequest,
 ): Scene {
   const fieldDeg = checkRequest(request);
+  const first = compose(stars, deepSky, figures, request, fieldDeg, usualKeyMm);
+  return first.keyMm <= usualKeyMm
+    ? first.scene
+    : compose(stars, deepSky, figures, request, fieldDeg, first.keyMm).scene;
+}
+
+/** A scene that leaves the key a height, and the height that the key took. */
+function compose(
+  stars: StarCatalogue,
+  deepSky: readonly DeepSkyObject[],
+  figures: readonly ConstellationFigure[],
+  request: ChartRequest,
+  fieldDeg: number,
+  keyRoomMm: number,
+): { readonly scene: Scene; readonly keyMm: number } {
   const { scale, target } = request;
   const sky = request.view === null ? null : localSky(request.view);
-  const sheet = layOut(request, instrumentLines(request, fieldDeg, sky));
+  const guide = wayFor(stars, request, sky);
+  const instrument = instrumentLines(request, fieldDeg, sky);
+  const inset = insetOn(stars, request, fieldDeg, sky, (panel) =>
+    layOut(request, instrument, guide.text, panel, keyRoomMm),
+  );
+  const sheet = layOut(request, instrument, guide.text, inset === null ? null : insetSize(inset), keyRoomMm);
   const plate = plateFor(request, fieldDeg, sheet.frame, sky);
   const targetAt = plate.toSheet(target)!;
-  const standing = scale === 'eye' && sky !== null ? standingFor(sky, plate, target) : null;
+  const standing =
+    scale === 'eye' && sky !== null ? standingFor(sky, plate, target, request.skyline ?? []) : null;
 
   const { drawn, faintestMagnitude } = starsFor(
     stars,
     plate,
     scale,
     (star) => isBehindDisc(star, target) || (standing?.isBelowGround(star) ?? false),
+    guide.stars,
   );
   const dots: Disc[] = drawn.map(({ star, at }) => ({
     xMm: at[0],
@@ -57,10 +96,14 @@ export function buildScene(
     ({ object }) =>
       standing?.isBelowGround({ raRad: object.raDeg * degree, decRad: object.decDeg * degree }) !== true,
   );
-  const path = placePath(request.path, plate, target.name);
 
   const next = request.next === undefined ? [] : nextFrame(request.next, plate, request);
   const symbol = targetSymbol(plate, target, drawn, faintestMagnitude);
+  const hours = placeHours(request.publicHours, plate, target.name);
+  const path = placePath(request.path, plate, target.name, [
+    ...hours.discs,
+    ...(symbol.kind === 'disc' ? [{ xMm: targetAt[0], yMm: targetAt[1], radiusMm: symbol.semiMajorMm }] : []),
+  ]);
   const outreach = symbol.semiMajorMm <= largestRingedMm ? symbol.semiMajorMm : 0;
   const ring = targetMark(
     targetAt,
@@ -69,6 +112,21 @@ export function buildScene(
     target.name,
   );
   const targetDisc: Disc = { xMm: targetAt[0], yMm: targetAt[1], radiusMm: ring.clearRadiusMm };
+  const way = placeWay(guide.way, plate, target, targetDisc, faintestMagnitude);
+  const tail = placeTail(target.tailDeg ?? null, plate.turn, targetDisc, target.name);
+  // A landing's ring is part of its dot as far as writing goes.
+  const ringed = dots.map((dot, index): Disc => {
+    const ring = way.discs.find(({ xMm, yMm }) => xMm === dot.xMm && yMm === dot.yMm);
+    // So are the strokes beside a double star.
+    const isDouble = objects.some(
+      ({ at, object }) => object.kind === 'doubleStar' && at === drawn[index]!.at,
+    );
+    if (ring === undefined && !isDouble) return dot;
+    const radiusMm = (ring ?? dot).radiusMm + (isDouble ? doubleStrokeMm : 0);
+    return { ...dot, radiusMm, dotMm: dot.radiusMm };
+  });
+  const isOwnDot = ({ at, object }: PlacedObject): boolean =>
+    object.kind === 'doubleStar' && drawn.some((star) => star.at === at);
   const objectDiscs: Disc[] = objects.map(({ at, size }) => ({
     xMm: at[0],
     yMm: at[1],
@@ -85,8 +143,11 @@ export function buildScene(
   const wishes: LabelWish[] = [
     ...(standing?.wishes ?? []),
     targetWish(target, targetDisc),
+    ...way.wishes,
+    ...hours.wishes,
+    ...tail.wishes,
     ...path.inside.map(({ at }, index) => pathWish(at, pathDiscs[index]!, index, path.inside.length)),
-    ...starWishes(drawn, dots, scale, targetDisc).filter(({ owner }) => owner !== dots[own]),
+    ...starWishes(drawn, ringed, scale, targetDisc, guide.stars).filter(({ owner }) => owner !== ringed[own]),
     ...objectWishes(objects, objectDiscs, drawn),
     ...(scale === 'eye'
       ? constellationWishes(figures, plate, (corner) => standing?.isBelowGround(corner) ?? false)
@@ -94,8 +155,22 @@ export function buildScene(
   ];
   const labels = placeLabels(wishes, {
     frame: plate.frame,
-    discs: [targetDisc, ...dots, ...objectDiscs, ...pathDiscs, ...arrowDiscs],
-    walls: [...path.pieces, ...ring.strokes, ...(standing?.walls ?? [])],
+    discs: [
+      targetDisc,
+      ...ringed,
+      ...objectDiscs.filter((_, index) => !isOwnDot(objects[index]!)),
+      ...pathDiscs,
+      ...arrowDiscs,
+      ...hours.discs,
+    ],
+    walls: [
+      ...path.pieces,
+      ...way.lines,
+      ...way.barbs,
+      ...tail.lines,
+      ...ring.strokes,
+      ...(standing?.walls ?? []),
+    ],
     threads: [
       ...lines.map(({ line }) => line),
       ...objects.flatMap(({ at, size }) => outline(at, size)),
@@ -120,12 +195,21 @@ export function buildScene(
     symbols: [...used].sort(),
     targetName: target.name,
     hasPath: path.pieces.length > 0,
+    hasHours: hours.marks.length > 0,
+    hasTail: tail.marks.length > 0,
+    hasWay: way.lines.length > 0,
     hasFigures: lines.length > 0,
     hasAltitudes: standing !== null,
     next: request.next,
     upAngleRad: sky === null || isZenithUp(request) ? null : positionAngle(target, sky.zenith),
     showsDirections: standing === null,
   });
+
+  const box =
+    inset === null || sheet.panel === null
+      ? { marks: [], texts: [] }
+      : drawInset({ inset, name: target.name, turn: plate.turn, clock: request.view?.clock }, sheet.panel);
+  const look = lookMarks(request, plate, targetAt, symbol, drawn, faintestMagnitude);
 
   const marks: Mark[] = [
     ...figureMarks(
@@ -137,15 +221,21 @@ export function buildScene(
       symbolMarks({ at, kind: object.kind, ...size, role: 'deepSky', of: object.id, widthPt: 0.6 }),
     ),
     ...next,
+    ...way.marks(labels.map(({ box }) => box)),
     ...path.marks,
+    ...leaderMarks(labels),
+    ...hours.marks,
     ...symbolMarks({ at: targetAt, ...symbol, role: 'target', of: target.name, widthPt: 0.8 }),
+    ...look,
+    ...tail.marks,
     ...ring.marks,
     frameMark(plate.frame),
+    ...box.marks,
     ...key.marks,
     ...sheet.marks,
   ];
   const { centre } = plate.projection;
-  return {
+  const scene: Scene = {
     title: request.words.title,
     language: 'en',
     description: describe(request, fieldDeg, drawn.length, faintestMagnitude),
@@ -164,8 +254,29 @@ export function buildScene(
     target: { name: target.name, xMm: targetAt[0], yMm: targetAt[1] },
     path: path.points,
     marks,
-    texts: [...sheet.texts, ...key.texts],
+    texts: [...sheet.texts, ...key.texts, ...box.texts],
   };
+  return { scene, keyMm: key.heightMm };
+}
+
+/** What a target shows beyond its outline: the unlit part of a large disc, the second star of a wide pair. */
+function lookMarks(
+  { inset, target }: ChartRequest,
+  plate: Plate,
+  at: SheetPoint,
+  symbol: SymbolSize & { readonly kind: SymbolKind },
+  drawn: readonly DrawnStar[],
+  faintestMagnitude: number,
+): Mark[] {
+  if (inset === undefined) return [];
+  if (inset.kind === 'pair') {
+    return isResolved(inset, plate.mmPerRadian, faintestMagnitude)
+      ? companionMarks(inset, plate, at, drawn, faintestMagnitude, target.name)
+      : [];
+  }
+  if (symbol.kind !== 'disc') return [];
+  const bright = sheetAngle(plate.turn, inset.brightLimbDeg * degree);
+  return phaseMarks(at, symbol.semiMajorMm, inset.litFraction, bright, 'target', target.name);
 }
 
 function dotRadiusFinder(dots: readonly Disc[]): (point: SheetPoint) => number {
@@ -179,80 +290,4 @@ function dotRadiusFinder(dots: readonly Disc[]): (point: SheetPoint) => number {
     }
     return 0;
   };
-}
-
-/** The target's label may stand this far out before it is given up, millimetres. */
-const targetLabelReachMm = 30;
-
-function isStarKind(kind: string): boolean {
-  return kind === 'star' || kind === 'doubleStar';
-}
-
-function targetWish(target: ChartTarget, owner: Disc): LabelWish {
-  return {
-    text: target.name,
-    of: target.name,
-    face: 'bold',
-    sizePt: 11,
-    gray: 0,
-    spacingPt: 0,
-    mayStray: true,
-    rank: labelRank.target,
-    owner,
-    spots: spotsAround(owner, targetLabelReachMm),
-  };
-}
-
-function pathWish(at: string, owner: Disc, index: number, count: number): LabelWish {
-  const isEnd = index === 0 || index === count - 1;
-  return {
-    text: at,
-    of: `path ${at}`,
-    face: 'sans',
-    sizePt: 8,
-    gray: 0,
-    spacingPt: 0,
-    mayStray: false,
-    rank: labelRank.path + (isEnd ? 0 : 0.1),
-    owner,
-    spots: spotsBeside(owner),
-  };
-}
-
-function frameMark(frame: Frame): Mark {
-  const shared = {
-    role: 'frame',
-    of: null,
-    stroke: { widthPt: 1, gray: 0 },
-    fillGray: null,
-    layer: 'over',
-    clipped: false,
-  } as const;
-  if (frame.shape === 'circle') {
-    return { ...shared, shape: 'circle', xMm: frame.xMm, yMm: frame.yMm, radiusMm: frame.radiusMm };
-  }
-  const right = frame.xMm + frame.widthMm;
-  const bottom = frame.yMm + frame.heightMm;
-  return {
-    ...shared,
-    shape: 'polygon',
-    points: [
-      [frame.xMm, frame.yMm],
-      [right, frame.yMm],
-      [right, bottom],
-      [frame.xMm, bottom],
-    ],
-  };
-}
-
-function describe(request: ChartRequest, fieldDeg: number, count: number, faintest: number): string {
-  const instrument = {
-    eye: 'the unaided eye',
-    binocular: 'binoculars or a finder',
-    eyepiece: 'a telescope’s eyepiece',
-  }[request.scale];
-  return (
-    `Finder chart of ${request.target.name} for ${instrument}, ${fieldWords(fieldDeg)} across, ` +
-    `with ${String(count)} stars to magnitude ${faintest.toFixed(1)}.`
-  );
 }

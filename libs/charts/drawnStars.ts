@@ -21,12 +21,16 @@ export interface DrawnStar {
   readonly at: SheetPoint;
 }
 
-/** The stars a sheet shows, brightest first, and the magnitude (in tenths) to which it shows all of them. */
+/**
+ * The stars a sheet shows, brightest first, and the magnitude (in tenths) to which it shows all of them.
+ * `also` are shown whatever their magnitude, where they lie in the frame.
+ */
 export function starsFor(
   stars: StarCatalogue,
   plate: Plate,
   scale: ChartScale,
   hidden: (star: Star) => boolean,
+  also: readonly Star[] = [],
 ): { readonly drawn: readonly DrawnStar[]; readonly faintestMagnitude: number } {
   // The catalogue's own end in tenths: its faintest star, at 10.999 say, belongs to a list to 11.0.
   const catalogueEnd = Math.ceil(stars.faintestMagnitude * 10 - 1e-9) / 10;
@@ -46,9 +50,22 @@ export function starsFor(
     if (at !== null && isInside(plate.frame, at[0], at[1], 0) && !hidden(star)) drawn.push({ star, at });
   }
   const next = drawn[depth[scale].most];
-  if (next === undefined) return { drawn, faintestMagnitude: limit };
+  if (next === undefined) return { drawn: withAlso(drawn, also, plate), faintestMagnitude: limit };
   const faintestMagnitude = Math.floor(next.star.magnitude * 10 - 1e-9) / 10;
-  return { drawn: drawn.filter(({ star }) => star.magnitude <= faintestMagnitude), faintestMagnitude };
+  const kept = drawn.filter(({ star }) => star.magnitude <= faintestMagnitude);
+  return { drawn: withAlso(kept, also, plate), faintestMagnitude };
+}
+
+function withAlso(drawn: readonly DrawnStar[], also: readonly Star[], plate: Plate): readonly DrawnStar[] {
+  const added: DrawnStar[] = [];
+  for (const star of also) {
+    const at = plate.toSheet(star);
+    if (at === null || !isInside(plate.frame, at[0], at[1], 0)) continue;
+    const isThere = drawn.some((one) => one.star.raRad === star.raRad && one.star.decRad === star.decRad);
+    if (!isThere) added.push({ star, at });
+  }
+  if (added.length === 0) return drawn;
+  return [...drawn, ...added].sort((one, other) => one.star.magnitude - other.star.magnitude);
 }
 
 /** Two places nearer than this are the same star: catalogues of bright doubles differ by a few arcseconds. */

@@ -9,6 +9,7 @@ export {
   type Paper,
   type PathPoint,
   usualFieldDeg,
+  usualFinderFieldDeg,
 } from './request';
 export type {
   Frame,
@@ -23,6 +24,8 @@ export type {
 } from './scene';
 export { buildScene } from './buildScene';
 export { dotDiameterMm } from './dots';
+export type { DiscInset, Inset, InsetMoon, InsetRings, PairInset } from './inset';
+export { type SkylinePoint } from './skyline';
 export { type Projection, projectionAbout, type ProjectionKind } from './projection';
 export { renderSvg } from './svg';
 export { drawScene, renderPdf } from './pdf';

@@ -38,11 +38,15 @@ export function fieldWords(fieldDeg: number): string {
 export function coordinateWords(raRad: number, decRad: number): string {
   const turns = (((raRad / (2 * Math.PI)) % 1) + 1) % 1;
   const tenths = Math.round(turns * 24 * 600) % (24 * 600);
-  const minutes = Math.round(Math.abs((decRad * 180) / Math.PI) * 60);
-  const two = (value: number): string => String(value).padStart(2, '0');
   const ra = `${String(Math.floor(tenths / 600))}h ${((tenths % 600) / 10).toFixed(1).padStart(4, '0')}m`;
-  const sign = decRad < 0 && minutes > 0 ? '–' : '+';
-  return `RA ${ra}, Dec ${sign}${String(Math.floor(minutes / 60))}° ${two(minutes % 60)}′`;
+  return `RA ${ra}, ${declinationWords(decRad)}`;
+}
+
+/** "Dec +22° 01′", rounded, never 60 of anything. */
+export function declinationWords(decRad: number): string {
+  const minutes = Math.round(Math.abs((decRad * 180) / Math.PI) * 60);
+  const sign = decRad < 0 && minutes > 0 ? '−' : '+';
+  return `Dec ${sign}${String(Math.floor(minutes / 60))}° ${String(minutes % 60).padStart(2, '0')}′`;
 }
 
 function turnWords(orientation: Orientation, zenithUp: boolean): string[] {

@@ -19,6 +19,9 @@ export interface KeyContent {
   readonly symbols: readonly SymbolKind[];
   readonly targetName: string;
   readonly hasPath: boolean;
+  readonly hasHours: boolean;
+  readonly hasTail: boolean;
+  readonly hasWay: boolean;
   readonly hasFigures: boolean;
   readonly hasAltitudes: boolean;
   readonly next: ChartRequest['next'];
@@ -29,11 +32,16 @@ export interface KeyContent {
 
 const line: Stroke = { widthPt: 0.8, gray: 0 };
 const textPt = 8;
-const rowMm = 5;
+const rowMm = 4.6;
+/** Under the last row. */
+const underMm = 1.2;
 const firstRowMm = 6.6;
 
 /** The strip under the chart: directions, scale, how the view is turned, dots and symbols, those used only. */
-export function drawKey(sheet: Sheet, content: KeyContent): { marks: Mark[]; texts: SheetText[] } {
+export function drawKey(
+  sheet: Sheet,
+  content: KeyContent,
+): { marks: Mark[]; texts: SheetText[]; heightMm: number } {
   const marks: Mark[] = [];
   const text = new Typesetter();
   const top = sheet.keyTopMm;
@@ -46,8 +54,8 @@ export function drawKey(sheet: Sheet, content: KeyContent): { marks: Mark[]; tex
   x = drawScaleBar(marks, text, content, x, top);
   drawDots(marks, text, content, x, sheet.rightMm, top + firstRowMm);
   text.begin();
-  drawSymbols(marks, text, content, x, sheet.rightMm, top + firstRowMm + rowMm);
-  return { marks, texts: text.texts };
+  const last = drawSymbols(marks, text, content, x, sheet.rightMm, top + firstRowMm + rowMm);
+  return { marks, texts: text.texts, heightMm: last - top + underMm };
 }
 
 const shared = { role: 'key', of: null, layer: 'over', clipped: false } as const;
@@ -194,7 +202,7 @@ function drawDots(
       stroke: null,
       fillGray: 0,
     });
-    const number = magnitude < 0 ? `–${String(-magnitude)}` : String(magnitude);
+    const number = magnitude < 0 ? `−${String(-magnitude)}` : String(magnitude);
     const word = standsForMore && magnitude === brightest ? `${number} or brighter` : number;
     text.write('key', word, at + 2 * radiusMm + 0.8, y, 'sans', textPt);
     at += 2 * radiusMm + 0.8 + textWidthMm(word, 'sans', textPt) + 2.6;
@@ -205,7 +213,7 @@ function drawDots(
   if (gloss !== undefined) text.write('key', gloss, at, y, 'sans', textPt);
 }
 
-/** The other signs used on the sheet, flowing into rows. */
+/** The other signs used on the sheet, flowing into rows. Gives the baseline of the last. */
 function drawSymbols(
   marks: Mark[],
   text: Typesetter,
@@ -213,7 +221,7 @@ function drawSymbols(
   left: number,
   right: number,
   firstY: number,
-): void {
+): number {
   const iconMm = 6;
   let x = left;
   let y = firstY;
@@ -246,6 +254,40 @@ function drawSymbols(
     item('its path, with times', (middle) => {
       marks.push(strokeLine([middle[0] - 3, middle[1]], [middle[0] + 3, middle[1]]));
       marks.push(strokeLine([middle[0], middle[1] - 1], [middle[0], middle[1] + 1]));
+    });
+  }
+  if (content.hasHours) {
+    item('where it stands as we open and close', (middle) => {
+      marks.push({
+        ...shared,
+        shape: 'circle',
+        xMm: middle[0],
+        yMm: middle[1],
+        radiusMm: 0.9,
+        stroke: line,
+        fillGray: 1,
+      });
+    });
+  }
+  if (content.hasTail) {
+    item('which way its tail points', (middle) => {
+      for (const rise of [-0.9, 0, 0.9]) {
+        marks.push(
+          strokeLine([middle[0] - 2.5, middle[1]], [middle[0] + 2.5, middle[1] + rise], {
+            widthPt: 0.6,
+            gray: 0,
+          }),
+        );
+      }
+    });
+  }
+  if (content.hasWay) {
+    item('the way there, step by step', (middle) => {
+      const tip: SheetPoint = [middle[0] + 3, middle[1]];
+      const stroke: Stroke = { widthPt: 1, gray: 0.3 };
+      marks.push(strokeLine([middle[0] - 3, middle[1]], tip, stroke));
+      marks.push(strokeLine([tip[0] - 2, tip[1] - 0.8], tip, stroke));
+      marks.push(strokeLine([tip[0] - 2, tip[1] + 0.8], tip, stroke));
     });
   }
   const { next } = content;
@@ -304,4 +346,5 @@ function drawSymbols(
       marks.push(strokeLine([middle[0] - 2, middle[1]], [middle[0] + 0.2, middle[1]]));
     });
   }
+  return y;
 }

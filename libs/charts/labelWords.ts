@@ -1,7 +1,8 @@
-import type { ConstellationFigure, StarLabel } from '#catalogue';
+import type { ConstellationFigure, Star, StarLabel } from '#catalogue';
 import { isLarge, type PlacedObject } from './deepSky';
 import type { DrawnStar } from './drawnStars';
-import { type Disc, type LabelWish, spotsAround, spotsBeside, spotsRound } from './labels';
+import { type Disc, type LabelWish } from './labels';
+import { spotsAround, spotsBeside, spotsLed, spotsRound } from './labelSpots';
 import { isInside, type Plate } from './plate';
 import type { SkyPoint } from './projection';
 import type { ChartScale } from './request';
@@ -13,6 +14,8 @@ export const labelRank = {
   /** A named star right beside the target is what one aims at first; the target's own label has more room. */
   guideStar: 1,
   target: 2,
+  /** The number of a step of the way stands on its arrow or nowhere. */
+  step: 2.2,
   altitude: 2.5,
   path: 3,
   brightStar: 4,
@@ -33,6 +36,8 @@ const named: Readonly<Record<ChartScale, { readonly name: number; readonly lette
 const besideMm = 6;
 /** A proper name may stand this far from its dot where it finds no room beside it, millimetres. */
 const nameReachMm = 3;
+/** And the name of a star of the way, which must be found, this far with a line to it. */
+const guideReachMm = 12;
 
 /** Names of stars: the proper name where the star is bright enough, else its Greek letter or number. */
 export function starWishes(
@@ -40,16 +45,19 @@ export function starWishes(
   discs: readonly Disc[],
   scale: ChartScale,
   target: Disc,
+  guides: readonly Star[] = [],
 ): LabelWish[] {
   return drawn.flatMap(({ star }, index) => {
     if (star.label === null) return [];
-    const text = starWord(star.label, star.magnitude, scale);
+    const isGuide = guides.some(({ raRad, decRad }) => raRad === star.raRad && decRad === star.decRad);
+    const text = isGuide ? guideWord(star.label, scale) : starWord(star.label, star.magnitude, scale);
     const owner = discs[index];
     if (text === null || owner === undefined) return [];
     const bright = text === star.label.name;
     const isBesideTarget =
       bright && Math.hypot(owner.xMm - target.xMm, owner.yMm - target.yMm) < target.radiusMm + besideMm;
-    const rank = isBesideTarget ? labelRank.guideStar : bright ? labelRank.brightStar : labelRank.star;
+    const rank =
+      isBesideTarget || isGuide ? labelRank.guideStar : bright ? labelRank.brightStar : labelRank.star;
     return [
       {
         text,
@@ -61,7 +69,12 @@ export function starWishes(
         mayStray: false,
         rank: rank + Math.min(0.9, (star.magnitude + 2) / 20),
         owner,
-        spots: bright ? spotsAround(owner, nameReachMm) : spotsBeside(owner),
+        isLed: isGuide,
+        spots: isGuide
+          ? spotsLed(owner, nameReachMm, guideReachMm)
+          : bright
+            ? spotsAround(owner, nameReachMm)
+            : spotsBeside(owner),
       } satisfies LabelWish,
     ];
   });
@@ -78,6 +91,12 @@ function starWord(label: StarLabel, magnitude: number, scale: ChartScale): strin
   return scale === 'eyepiece' && label.constellation !== null
     ? `${String(label.flamsteed)} ${label.constellation}`
     : String(label.flamsteed);
+}
+
+/** A star of the way bears the name that its step in words calls it by. */
+function guideWord(label: StarLabel, scale: ChartScale): string {
+  if (label.name !== null) return label.name;
+  return scale === 'eye' && label.bayerLetter !== null ? label.bayerLetter : starKey(label);
 }
 
 /** The shortest unambiguous name of a labelled star. */
@@ -102,7 +121,7 @@ export function objectWishes(
     }
     const whole: Disc = { xMm: at[0], yMm: at[1], radiusMm: size.semiMajorMm + 0.4 };
     const near = spotsBeside(owner);
-    const outside = spotsBeside(whole);
+    const outside = spotsAround(whole, 3);
     return [
       {
         text: object.id,
@@ -111,7 +130,8 @@ export function objectWishes(
         sizePt: 8,
         gray: 0,
         spacingPt: 0,
-        mayStray: false,
+        // The outline of something large says whose name it is; its middle may be far.
+        mayStray: isLarge(size),
         rank:
           (object.magnitude <= 5 ? labelRank.brightObject : labelRank.object) +
           Math.min(0.9, Math.max(0, object.magnitude / 20)),

@@ -1,11 +1,5 @@
-import {
-  type Disc,
-  type LabelWish,
-  placeLabels,
-  spotsAround,
-  spotsBeside,
-  type Surroundings,
-} from './labels';
+import { type Disc, type LabelWish, placeLabels, type Surroundings } from './labels';
+import { spotsAround, spotsBeside } from './labelSpots';
 
 const open: Surroundings = {
   frame: { shape: 'rectangle', xMm: 0, yMm: 0, widthMm: 100, heightMm: 100 },
@@ -86,6 +80,6 @@ describe('placeLabels', () => {
 
   it('prints a stand-in for a sign the font lacks', () => {
     const owner = disc(50, 50);
-    expect(placeLabels([wish('−5', owner)], open)[0]!.text).toBe('–5');
+    expect(placeLabels([wish('星', owner)], open)[0]!.text).toBe('?');
   });
 });

@@ -1,6 +1,9 @@
 import { type Box, comesNear, type Line } from './lines';
+import { type DiscGrid, discGrid } from './discGrid';
+import { chooseSpots } from './labelSearch';
+import { isLeaderFree, leaderTo } from './leader';
 import { isInside } from './plate';
-import type { Frame, SceneLabel, SheetPoint } from './scene';
+import type { Frame, SceneLabel } from './scene';
 import { capHeightMm, descentMm, type Face, mmPerPt, printable, textWidthMm } from './typeface';
 
 /** How large a line of text is, millimetres: `above` and `below` its baseline. */
@@ -15,6 +18,8 @@ export interface Spot {
   readonly xMm: number;
   readonly yMm: number;
   readonly cost: number;
+  /** True where it may stand nearer to another disc than to its own, since a line leads to that. */
+  readonly strays?: boolean;
 }
 
 /** A label that would like to stand on the sheet. */
@@ -31,6 +36,10 @@ export interface LabelWish {
   readonly owner: Disc | null;
   /** True where it may stand nearer to another disc than to its own: the target's, set in bold. */
   readonly mayStray: boolean;
+  /** True where a thin line leads to the owner from a spot that stands off it. */
+  readonly isLed?: boolean;
+  /** Walls that it may stand on: the number of a step on its own arrow. */
+  readonly crosses?: readonly Line[];
   readonly spots: (size: TextSize) => readonly Spot[];
 }
 
@@ -39,6 +48,8 @@ export interface Disc {
   readonly xMm: number;
   readonly yMm: number;
   readonly radiusMm: number;
+  /** Of the dot itself where the disc takes in a ring or strokes round it. */
+  readonly dotMm?: number;
 }
 
 export interface Surroundings {
@@ -52,8 +63,6 @@ export interface Surroundings {
   readonly isBarred: (box: Box, wish: LabelWish) => boolean;
 }
 
-/** Between a label and its own dot. */
-const ownGapMm = 0.5;
 /** The least between a label and any dot but its own. */
 const otherGapMm = 0.6;
 /** A label is nearer to its own dot than to any other by at least this. */
@@ -61,120 +70,135 @@ const nearerByMm = 0.1;
 const betweenLabelsMm = 0.5;
 const frameGapMm = 0.9;
 const wallGapMm = 0.35;
+const leaderGapMm = 0.2;
 const threadCost = 3;
 
+/** No label needs more choices than this; an area's name has hundreds of spots that differ little. */
+const mostSpots = 16;
+/** One rank is worth this many of the next, so that a label gives way to many lesser ones only. */
+const rankWorth = 4;
+const leastWorth = 60;
+const lastRank = 9;
+
+interface Candidate {
+  readonly spot: Spot;
+  readonly box: Box;
+  readonly leader: Line | null;
+  readonly cost: number;
+}
+
 /**
- * Gives each wish, best rank first, the cheapest of its spots that keeps clear of every disc, wall, other label
- * and the frame. A wish without such a spot is left out.
+ * Gives labels their spots so that each keeps clear of every disc, wall, other label and the frame, as many and as
+ * well placed as can be found, better ranks first. A label without such a spot is left out.
  */
 export function placeLabels(wishes: readonly LabelWish[], around: Surroundings): SceneLabel[] {
-  const boxes: Box[] = [];
-  const labels: SceneLabel[] = [];
   const ranked = wishes.map((wish, order) => ({
     wish: { ...wish, text: printable(wish.text, wish.face) },
     order,
   }));
   ranked.sort((one, other) => one.wish.rank - other.wish.rank || one.order - other.order);
-  for (const { wish } of ranked) {
+  const grid = discGrid(around.discs);
+  const labels = ranked.map(({ wish }) => {
     const size = sizeOf(wish);
-    let best: { spot: Spot; box: Box; cost: number } | null = null;
-    for (const spot of wish.spots(size)) {
-      if (best !== null && spot.cost >= best.cost) continue;
-      const box: Box = [spot.xMm, spot.yMm - size.above, spot.xMm + size.width, spot.yMm + size.below];
-      if (!isFree(box, wish, boxes, around)) continue;
-      const crossed = around.threads.filter((line) => comesNear(box, line, 0.2)).length;
-      const cost = spot.cost + threadCost * crossed;
-      if (best === null || cost < best.cost) best = { spot, box, cost };
-    }
-    if (best === null) continue;
-    boxes.push(best.box);
-    labels.push({
-      text: wish.text,
-      of: wish.of,
-      xMm: best.spot.xMm,
-      yMm: best.spot.yMm,
-      widthMm: size.width,
-      box: [...best.box],
-      face: wish.face,
-      sizePt: wish.sizePt,
-      gray: wish.gray,
-      spacingPt: wish.spacingPt,
-    });
+    return { wish, size, candidates: candidatesOf(wish, size, around, grid) };
+  });
+  const chosen = chooseSpots(
+    labels.map(({ wish, candidates }) => ({
+      costs: candidates.map(({ cost }) => cost),
+      worth: leastWorth * rankWorth ** Math.max(0, lastRank - wish.rank),
+    })),
+    neighbours(labels.map(({ candidates }) => candidates)),
+    (a, i, b, j) => clash(labels[a]!.candidates[i]!, labels[b]!.candidates[j]!),
+  );
+  return labels.flatMap(({ wish, size, candidates }, index) => {
+    const taken = candidates[chosen[index]!];
+    return taken === undefined
+      ? []
+      : [
+          {
+            text: wish.text,
+            of: wish.of,
+            xMm: taken.spot.xMm,
+            yMm: taken.spot.yMm,
+            widthMm: size.width,
+            box: [...taken.box] as const,
+            face: wish.face,
+            sizePt: wish.sizePt,
+            gray: wish.gray,
+            spacingPt: wish.spacingPt,
+            ...(taken.leader === null ? {} : { leader: taken.leader }),
+          },
+        ];
+  });
+}
+
+/** The free spots of a label, cheapest first. */
+function candidatesOf(wish: LabelWish, size: TextSize, around: Surroundings, grid: DiscGrid): Candidate[] {
+  const spots = [...wish.spots(size)].sort((one, other) => one.cost - other.cost);
+  const found: Candidate[] = [];
+  for (const spot of spots) {
+    const box: Box = [spot.xMm, spot.yMm - size.above, spot.xMm + size.width, spot.yMm + size.below];
+    if (!isFree(box, wish, spot, around, grid)) continue;
+    const { owner } = wish;
+    const leader = wish.isLed === true && owner !== null ? leaderTo(box, owner) : null;
+    if (spot.strays === true && leader === null) continue;
+    if (leader !== null && owner !== null && !isLeaderFree(leader, owner, around.discs)) continue;
+    const crossed = around.threads.filter((line) => comesNear(box, line, 0.2)).length;
+    found.push({ spot, box, leader, cost: spot.cost + threadCost * crossed });
+    if (found.length === mostSpots) break;
   }
-  return labels;
+  return found.sort((one, other) => one.cost - other.cost);
 }
 
-/** The eight spots beside a disc, right first, then left, above and below, then the corners. */
-export function spotsBeside({ xMm, yMm, radiusMm }: Disc): (size: TextSize) => Spot[] {
-  const gap = radiusMm + ownGapMm;
-  const corner = gap * Math.SQRT1_2;
-  return ({ width, above, below }) => {
-    const middle = yMm + (above - below) / 2;
-    return [
-      { xMm: xMm + gap, yMm: middle, cost: 0 },
-      { xMm: xMm - gap - width, yMm: middle, cost: 0.5 },
-      { xMm: xMm + corner, yMm: yMm - corner - below, cost: 0.7 },
-      { xMm: xMm + corner, yMm: yMm + corner + above, cost: 0.8 },
-      { xMm: xMm - width / 2, yMm: yMm - gap - below, cost: 0.9 },
-      { xMm: xMm - width / 2, yMm: yMm + gap + above, cost: 1 },
-      { xMm: xMm - corner - width, yMm: yMm - corner - below, cost: 1.1 },
-      { xMm: xMm - corner - width, yMm: yMm + corner + above, cost: 1.2 },
-    ];
-  };
-}
-
-/** Spots for a label that must find room: round a disc in sixteen directions, ever farther out. */
-export function spotsAround(disc: Disc, reachMm: number): (size: TextSize) => Spot[] {
-  const beside = spotsBeside(disc);
-  return (size) => {
-    const spots = beside(size);
-    const { width, above, below } = size;
-    for (let gap = 1.5; gap <= reachMm; gap += 1.5) {
-      for (let step = 0; step < 16; step++) {
-        const angle = (step * Math.PI) / 8;
-        const distance = disc.radiusMm + gap;
-        // The nearest point of the box, not its middle, stands at that distance.
-        const dx = Math.cos(angle) * (distance + width / 2);
-        const dy = Math.sin(angle) * (distance + (above + below) / 2);
-        spots.push({
-          xMm: disc.xMm + dx - width / 2,
-          yMm: disc.yMm + dy + (above - below) / 2,
-          cost: 1.5 + 0.4 * gap,
-        });
+/** For each label, the others of which some spot overlaps one of its own. */
+function neighbours(candidates: readonly (readonly Candidate[])[]): number[][] {
+  const reach = candidates.map((spots): Box | null =>
+    spots.length === 0
+      ? null
+      : [
+          Math.min(...spots.map((spot) => reachOf(spot, 0))),
+          Math.min(...spots.map((spot) => reachOf(spot, 1))),
+          Math.max(...spots.map((spot) => reachOf(spot, 2))),
+          Math.max(...spots.map((spot) => reachOf(spot, 3))),
+        ],
+  );
+  const near: number[][] = candidates.map(() => []);
+  for (let a = 0; a < reach.length; a++) {
+    for (let b = a + 1; b < reach.length; b++) {
+      const one = reach[a]!;
+      const other = reach[b]!;
+      if (one === null || other === null || !overlap(one, other)) continue;
+      if (candidates[a]!.some((spot) => candidates[b]!.some((rival) => clash(spot, rival)))) {
+        near[a]!.push(b);
+        near[b]!.push(a);
       }
     }
-    return spots;
-  };
+  }
+  return near;
 }
 
-/** Spots for the name of an area: on its middle, then ever farther round it, out to `reachMm`. */
-export function spotsRound(middle: SheetPoint, reachMm: number): (size: TextSize) => Spot[] {
-  return ({ width, above, below }) => {
-    const spots: Spot[] = [];
-    const put = (dx: number, dy: number): void => {
-      spots.push({
-        xMm: middle[0] + dx - width / 2,
-        yMm: middle[1] + dy + (above - below) / 2,
-        cost: 0.15 * Math.hypot(dx, dy),
-      });
-    };
-    put(0, 0);
-    for (let ring = 3; ring <= reachMm; ring += 3) {
-      const steps = 8 + 2 * Math.round(ring / 3);
-      for (let step = 0; step < steps; step++) {
-        const angle = (2 * Math.PI * step) / steps;
-        put(ring * Math.cos(angle), ring * Math.sin(angle));
-      }
-    }
-    return spots;
-  };
+/** How far a spot reaches to one side (0 left, 1 top, 2 right, 3 bottom), its leader included. */
+function reachOf({ box, leader }: Candidate, side: 0 | 1 | 2 | 3): number {
+  if (leader === null) return box[side];
+  const ends = [leader[0][side % 2]!, leader[1][side % 2]!];
+  return side < 2 ? Math.min(box[side], ...ends) : Math.max(box[side], ...ends);
 }
 
-/** One spot only, its text centred on a point. */
-export function spotAt(middle: SheetPoint): (size: TextSize) => Spot[] {
-  return ({ width, above, below }) => [
-    { xMm: middle[0] - width / 2, yMm: middle[1] + (above - below) / 2, cost: 0 },
-  ];
+function clash(one: Candidate, other: Candidate): boolean {
+  return (
+    overlap(one.box, other.box) ||
+    (one.leader !== null && comesNear(other.box, one.leader, leaderGapMm)) ||
+    (other.leader !== null && comesNear(one.box, other.leader, leaderGapMm))
+  );
+}
+
+function overlap(one: Box, other: Box): boolean {
+  return (
+    one[0] < other[2] + betweenLabelsMm &&
+    one[2] > other[0] - betweenLabelsMm &&
+    one[1] < other[3] + betweenLabelsMm &&
+    one[3] > other[1] - betweenLabelsMm
+  );
 }
 
 const hangs = /[gjpqyQçβγζημξρφχψςʹ,;()/]/;
@@ -190,9 +214,9 @@ function sizeOf(wish: LabelWish): TextSize {
   };
 }
 
-function isFree(box: Box, wish: LabelWish, boxes: readonly Box[], around: Surroundings): boolean {
+function isFree(box: Box, wish: LabelWish, spot: Spot, around: Surroundings, grid: DiscGrid): boolean {
   const [left, top, right, bottom] = box;
-  const { frame, discs, walls } = around;
+  const { frame, walls } = around;
   if (
     !isInside(frame, left, top, frameGapMm) ||
     !isInside(frame, right, top, frameGapMm) ||
@@ -201,35 +225,27 @@ function isFree(box: Box, wish: LabelWish, boxes: readonly Box[], around: Surrou
   ) {
     return false;
   }
-  for (const other of boxes) {
-    if (
-      left < other[2] + betweenLabelsMm &&
-      right > other[0] - betweenLabelsMm &&
-      top < other[3] + betweenLabelsMm &&
-      bottom > other[1] - betweenLabelsMm
-    ) {
-      return false;
-    }
-  }
   const gap =
-    wish.owner === null || wish.mayStray
+    wish.owner === null || wish.mayStray || spot.strays === true
       ? otherGapMm
       : Math.max(otherGapMm, distanceBetween(box, wish.owner) + nearerByMm);
-  for (const disc of discs) {
+  const isTooNear = (disc: Disc): boolean => {
+    if (disc === wish.owner) return false;
     const reach = disc.radiusMm + gap;
-    // Nearly every disc is far away; comparing edges first spares it the square.
-    if (disc.xMm <= left - reach || disc.xMm >= right + reach) continue;
-    if (disc.yMm <= top - reach || disc.yMm >= bottom + reach || disc === wish.owner) continue;
     const dx = disc.xMm < left ? left - disc.xMm : disc.xMm > right ? disc.xMm - right : 0;
     const dy = disc.yMm < top ? top - disc.yMm : disc.yMm > bottom ? disc.yMm - bottom : 0;
-    if (dx * dx + dy * dy < reach * reach) return false;
-  }
-  return !walls.some((line) => comesNear(box, line, wallGapMm)) && !around.isBarred(box, wish);
+    return dx * dx + dy * dy < reach * reach;
+  };
+  if (grid.someNear(box, gap, isTooNear)) return false;
+  return (
+    !walls.some((line) => comesNear(box, line, wallGapMm) && wish.crosses?.includes(line) !== true) &&
+    !around.isBarred(box, wish)
+  );
 }
 
 /** The clear distance from a box to a disc, millimetres; negative where the disc's middle lies deep inside. */
 function distanceBetween([left, top, right, bottom]: Box, disc: Disc): number {
   const dx = Math.max(left - disc.xMm, 0, disc.xMm - right);
   const dy = Math.max(top - disc.yMm, 0, disc.yMm - bottom);
-  return Math.hypot(dx, dy) - disc.radiusMm;
+  return Math.hypot(dx, dy) - (disc.dotMm ?? disc.radiusMm);
 }

@@ -1,3 +1,4 @@
+import type { Disc } from './labels';
 import type { Line } from './lines';
 import { isInside, type Plate } from './plate';
 import type { PathPoint } from './request';
@@ -18,10 +19,18 @@ export interface PlacedPath {
 }
 
 /** A moving target's path: a thin line, a tick across it at each point, an arrowhead the way it goes. */
-export function placePath(path: readonly PathPoint[], plate: Plate, of: string): PlacedPath {
+export function placePath(
+  path: readonly PathPoint[],
+  plate: Plate,
+  of: string,
+  covers: readonly Disc[] = [],
+): PlacedPath {
+  // Where a disc stands no tick's time is written.
+  const isCovered = ([x, y]: SheetPoint): boolean =>
+    covers.some(({ xMm, yMm, radiusMm }) => Math.hypot(x - xMm, y - yMm) < radiusMm + 0.6);
   const placed = path.map((point) => ({ at: point.at, point: plate.toSheet(point) }));
   const points = placed.flatMap(({ at, point }) =>
-    point === null ? [] : [{ at, xMm: point[0], yMm: point[1] }],
+    point === null || at === '' ? [] : [{ at, xMm: point[0], yMm: point[1] }],
   );
   const pieces: [SheetPoint, SheetPoint][] = [];
   for (let i = 1; i < placed.length; i++) {
@@ -36,8 +45,8 @@ export function placePath(path: readonly PathPoint[], plate: Plate, of: string):
     points: run,
     stroke: line,
   }));
-  placed.forEach(({ point }, index) => {
-    if (point === null) return;
+  placed.forEach(({ at, point }, index) => {
+    if (point === null || at === '') return;
     const before = placed[index - 1]?.point ?? point;
     const after = placed[index + 1]?.point ?? point;
     const length = Math.hypot(after[0] - before[0], after[1] - before[1]);
@@ -61,7 +70,9 @@ export function placePath(path: readonly PathPoint[], plate: Plate, of: string):
     arrow = head.middle;
   }
   const inside = placed.flatMap(({ at, point }) =>
-    point !== null && isInside(plate.frame, point[0], point[1], 1) ? [{ at, point }] : [],
+    point !== null && at !== '' && isInside(plate.frame, point[0], point[1], 1) && !isCovered(point)
+      ? [{ at, point }]
+      : [],
   );
   return { points, inside, pieces, marks, arrow };
 }
@@ -77,7 +88,7 @@ function arrowhead(
     to[0] + along[0] * ahead - along[1] * aside,
     to[1] + along[1] * ahead + along[0] * aside,
   ];
-  const start = 0.6;
+  const start = 1.1;
   const half = arrowMm * 0.38;
   return {
     mark: { shape: 'polygon', points: [at(start + arrowMm, 0), at(start, half), at(start, -half)] },

@@ -104,7 +104,7 @@ describe.each([
     const text = tool('pdftotext', '-layout', file, '-');
     expect(text).toContain('The cooling tower in Cygnus');
     expect(text).toContain('Packet 3');
-    expect(text).toContain('At –5 °C the battery tires ~ twice as fast.');
+    expect(text).toContain('At −5 °C the battery tires ≈ twice as fast.');
     for (const { text: label } of scene.labels) expect(text).toContain(label);
     if (scale === 'eye') for (const name of ['Vega', 'Deneb', 'CYGNUS']) expect(text).toContain(name);
   });

@@ -55,7 +55,9 @@ export function drawScene(
       drawChart(document, scene);
     }),
   );
-  for (const role of ['key', 'caution', 'note', 'foot'] as const) addParagraphs(document, sheet, scene, role);
+  for (const role of ['key', 'step', 'caution', 'note', 'foot'] as const) {
+    addParagraphs(document, sheet, scene, role);
+  }
   sheet.end();
   if (within === undefined) root.end();
 }

@@ -1,3 +1,6 @@
+import type { Inset } from './inset';
+import type { SkylinePoint } from './skyline';
+
 /** Which way of looking the sheet is for: the unaided eye, binoculars or a finder, a telescope's eyepiece. */
 export type ChartScale = 'eye' | 'binocular' | 'eyepiece';
 
@@ -18,9 +21,14 @@ export interface ChartTarget {
   readonly minorArcmin: number;
   /** Of the major axis, degrees from north through east; null where unknown or meaningless. */
   readonly positionAngleDeg: number | null;
+  /** Which way a comet's tail points, degrees from north through east; left out or null for all else. */
+  readonly tailDeg?: number | null;
 }
 
-/** One place of a moving target; `at` is the local time or date to print beside it. */
+/**
+ * One place of a moving target; `at` is the local time or date to print beside its tick, empty for a place
+ * between ticks that only bends the line.
+ */
 export interface PathPoint {
   readonly at: string;
   readonly utcMs: number;
@@ -33,6 +41,8 @@ export interface ChartView {
   readonly utcMs: number;
   readonly latitudeRad: number;
   readonly longitudeRad: number;
+  /** The local time of `utcMs` in words, "23:30", for readings that hold at that minute only. */
+  readonly clock?: string;
 }
 
 /** The words round the chart, already in the reader's language and local time. */
@@ -54,6 +64,17 @@ export interface ChartRequest {
   readonly path: readonly PathPoint[];
   readonly view: ChartView | null;
   readonly words: ChartWords;
+  /**
+   * Width in degrees of the finder that the way from star to star is worked out for; left out: 6 degrees; null:
+   * no way is wanted.
+   */
+  readonly finderFieldDeg?: number | null;
+  /** Where a moving target stands as the public hours begin and end; `at` is the local time of each. */
+  readonly publicHours?: { readonly opens: PathPoint; readonly closes: PathPoint };
+  /** How the target looks in a telescope, drawn in a box of its own on all but the eye's sheet. */
+  readonly inset?: Inset;
+  /** The site's skyline, drawn at the foot of an eye chart; left out or empty: the level horizon. */
+  readonly skyline?: readonly SkylinePoint[];
   /** What points to the top of an upright sheet; left out: the zenith at the eye scale, else north. */
   readonly up?: 'zenith' | 'north';
   /** The narrower sheet that follows this one, whose outline this one shows; left out where none follows. */
@@ -74,6 +95,9 @@ export class ChartProblem extends Error {
 
 /** The field each scale shows unless told otherwise, degrees. */
 export const usualFieldDeg: Readonly<Record<ChartScale, number>> = { eye: 60, binocular: 8, eyepiece: 1.5 };
+
+/** The field of a common finder, degrees (common practice: 5 to 7). */
+export const usualFinderFieldDeg = 6;
 
 const smallestFieldDeg = 0.1;
 const widestFieldDeg = 120;
@@ -118,12 +142,34 @@ export function checkRequest(request: ChartRequest): number {
   request.path.forEach((point, index) => {
     checkPlace(`path[${String(index)}]`, point);
   });
+  checkSkyline(request.skyline ?? []);
+  const finder = request.finderFieldDeg ?? usualFinderFieldDeg;
+  if (!(finder >= 1 && finder <= 20)) {
+    throw new ChartProblem(
+      'finderFieldDeg',
+      finder,
+      `the finder's field is ${String(finder)} degrees; it must be from 1 to 20`,
+    );
+  }
   if (view !== null) {
     checkFinite('view.utcMs', view.utcMs);
     checkFinite('view.longitudeRad', view.longitudeRad);
     checkWithin('view.latitudeRad', view.latitudeRad, Math.PI / 2);
   }
   return fieldDeg;
+}
+
+function checkSkyline(points: readonly SkylinePoint[]): void {
+  points.forEach(({ azimuthDeg, altitudeDeg }, index) => {
+    checkFinite(`skyline[${String(index)}].azimuthDeg`, azimuthDeg);
+    if (!(altitudeDeg >= -10 && altitudeDeg < 90)) {
+      throw new ChartProblem(
+        `skyline[${String(index)}].altitudeDeg`,
+        altitudeDeg,
+        `skyline[${String(index)}].altitudeDeg is ${String(altitudeDeg)}; it must be from -10 to less than 90 degrees`,
+      );
+    }
+  });
 }
 
 function checkPlace(field: string, place: { readonly raRad: number; readonly decRad: number }): void {

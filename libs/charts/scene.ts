@@ -17,12 +17,18 @@ export type SheetPoint = readonly [xMm: number, yMm: number];
 export type MarkRole =
   | 'ground'
   | 'horizon'
+  | 'levelHorizon'
   | 'altitude'
   | 'facing'
   | 'figure'
   | 'deepSky'
   | 'path'
   | 'nextFrame'
+  | 'way'
+  | 'place'
+  | 'tail'
+  | 'leader'
+  | 'inset'
   | 'target'
   | 'frame'
   | 'key'
@@ -109,9 +115,11 @@ export interface SceneLabel extends SceneText {
   readonly box: readonly [number, number, number, number];
   /** What it names. */
   readonly of: string;
+  /** The thin line from it to what it names, where it stands off that. */
+  readonly leader?: readonly [SheetPoint, SheetPoint];
 }
 
-export type TextRole = 'title' | 'subtitle' | 'instrument' | 'key' | 'note' | 'caution' | 'foot';
+export type TextRole = 'title' | 'subtitle' | 'instrument' | 'key' | 'step' | 'note' | 'caution' | 'foot';
 
 export interface SheetText extends SceneText {
   readonly role: TextRole;

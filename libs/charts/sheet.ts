@@ -1,5 +1,6 @@
 import type { ChartRequest, Paper } from './request';
 import type { Frame, Mark, SheetText, TextRole } from './scene';
+import type { WayText } from './wayWords';
 import { type Face, printable, textWidthMm, wrapped } from './typeface';
 
 const papers: Readonly<Record<Paper, { readonly widthMm: number; readonly heightMm: number }>> = {
@@ -10,9 +11,11 @@ const papers: Readonly<Record<Paper, { readonly widthMm: number; readonly height
 const sideMarginMm = 12;
 const topMm = 11;
 const footBaselineMm = 9;
-export const keyHeightMm = 24;
 const noteLineMm = 3.9;
 const notePt = 8.5;
+/** The numbers of steps hang left of their words. */
+const hangMm = 5;
+const panelGapMm = 6;
 
 export interface Sheet {
   readonly widthMm: number;
@@ -22,8 +25,20 @@ export interface Sheet {
   readonly frame: Frame;
   /** Top of the strip that holds the key. */
   readonly keyTopMm: number;
+  /** Where the inset stands, beside the notes; null without one. */
+  readonly panel: PanelBox | null;
   readonly texts: readonly SheetText[];
   readonly marks: readonly Mark[];
+}
+
+export interface PanelSize {
+  readonly widthMm: number;
+  readonly heightMm: number;
+}
+
+export interface PanelBox extends PanelSize {
+  readonly xMm: number;
+  readonly yMm: number;
 }
 
 /** Writes lines of text, keeping count of the paragraphs. */
@@ -63,7 +78,13 @@ export class Typesetter {
  * Lays out a sheet: title and event top left, instrument top right, the chart as large as the rest allows, the
  * strip for the key under it, then notes and cautions, and the foot line.
  */
-export function layOut(request: ChartRequest, instrument: readonly string[]): Sheet {
+export function layOut(
+  request: ChartRequest,
+  instrument: readonly string[],
+  way: WayText | null,
+  panel: PanelSize | null,
+  keyHeightMm: number,
+): Sheet {
   const { widthMm, heightMm } = papers[request.paper];
   const leftMm = sideMarginMm;
   const rightMm = widthMm - sideMarginMm;
@@ -73,12 +94,21 @@ export function layOut(request: ChartRequest, instrument: readonly string[]): Sh
   const footY = heightMm - footBaselineMm;
   const footLines = wrapped(request.words.foot, 'sans', 8, rightMm - leftMm);
   const footTop = footY - (footLines.length - 1) * 3.6 - 4.4;
+  const textRight = panel === null ? rightMm : rightMm - panel.widthMm - panelGapMm;
+  const steps = (way?.steps ?? []).map((words) =>
+    wrapped(words, 'sans', notePt, textRight - leftMm - hangMm),
+  );
+  const stepLines =
+    steps.reduce((sum, lines) => sum + lines.length, 0) + (way === null || way.steps.length === 0 ? 0 : 1);
   const notes = [
+    ...(way?.notes ?? []).map((words) => ({ words, face: 'sans' as const, role: 'step' as const })),
     ...request.words.cautions.map((words) => ({ words, face: 'bold' as const, role: 'caution' as const })),
     ...request.words.notes.map((words) => ({ words, face: 'sans' as const, role: 'note' as const })),
-  ].map((note) => ({ ...note, lines: wrapped(note.words, note.face, notePt, rightMm - leftMm) }));
+  ].map((note) => ({ ...note, lines: wrapped(note.words, note.face, notePt, textRight - leftMm) }));
   const noteLines = notes.reduce((sum, { lines }) => sum + lines.length, 0);
-  const notesHeight = noteLines === 0 ? 0 : noteLines * noteLineMm + 2.5;
+  const lineCount = noteLines + stepLines;
+  const wordsHeight = lineCount === 0 ? 0 : lineCount * noteLineMm + (stepLines > 0 ? 1.2 : 0) + 2.5;
+  const notesHeight = Math.max(wordsHeight, panel === null ? 0 : panel.heightMm + 3);
 
   const chartTop = headBottom + 3;
   const free = footTop - notesHeight - keyHeightMm - chartTop;
@@ -86,6 +116,19 @@ export function layOut(request: ChartRequest, instrument: readonly string[]): Sh
   const frameBottom = frame.shape === 'circle' ? frame.yMm + frame.radiusMm : frame.yMm + frame.heightMm;
 
   let noteY = frameBottom + keyHeightMm + 4.2;
+  if (way !== null && steps.length > 0) {
+    text.begin();
+    text.write('step', way.heading, leftMm, noteY, 'bold', notePt);
+    steps.forEach((lines, index) => {
+      text.begin();
+      lines.forEach((line, row) => {
+        noteY += noteLineMm;
+        if (row === 0) text.write('step', String(index + 1), leftMm, noteY, 'bold', notePt);
+        text.write('step', line, leftMm + hangMm, noteY, 'sans', notePt);
+      });
+    });
+    noteY += noteLineMm + 1.2;
+  }
   for (const note of notes) {
     text.begin();
     for (const line of note.lines) {
@@ -112,7 +155,19 @@ export function layOut(request: ChartRequest, instrument: readonly string[]): Sh
       clipped: false,
     },
   ];
-  return { widthMm, heightMm, leftMm, rightMm, frame, keyTopMm: frameBottom, texts: text.texts, marks };
+  const panelBox =
+    panel === null ? null : { ...panel, xMm: rightMm - panel.widthMm, yMm: frameBottom + keyHeightMm + 0.5 };
+  return {
+    widthMm,
+    heightMm,
+    leftMm,
+    rightMm,
+    frame,
+    keyTopMm: frameBottom,
+    panel: panelBox,
+    texts: text.texts,
+    marks,
+  };
 }
 
 /** Gives the height at which the head ends. */

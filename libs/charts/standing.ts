@@ -1,10 +1,12 @@
-import { compass, compassPoint, type LocalSky } from './horizon';
-import { type LabelWish, spotAt, spotsBeside } from './labels';
+import { compass, type CompassPoint, compassPoint, type LocalSky } from './horizon';
+import { type LabelWish } from './labels';
+import { spotAt, spotsBeside } from './labelSpots';
 import type { Box, Line } from './lines';
 import { labelRank } from './labelWords';
 import { isInside, type Plate } from './plate';
 import type { SkyPoint } from './projection';
 import type { Mark, SheetPoint } from './scene';
+import { skylineCorners, skylineOf, type SkylinePoint } from './skyline';
 
 const degree = Math.PI / 180;
 
@@ -18,29 +20,34 @@ export interface Standing {
   readonly bars: (box: Box, wish: LabelWish) => boolean;
 }
 
-/** The horizon, compass points and altitude ticks of a sky over a plate, for a target at an azimuth. */
-export function standingUnder(sky: LocalSky, plate: Plate, targetAzimuthRad: number): Standing {
-  const along: SheetPoint[] = [];
-  const below: SheetPoint[] = [];
-  const centreAzimuth = sky.altAz(plate.projection.centre).azimuthRad;
-  for (let step = -100; step <= 100; step += 2) {
-    const azimuth = centreAzimuth + step * degree;
-    const at = plate.toSheet(sky.placeAt(0, azimuth));
-    const under = plate.toSheet(sky.placeAt(-50 * degree, azimuth));
-    if (at !== null && under !== null) {
-      along.push(at);
-      below.unshift(under);
-    }
-  }
-  const showsHorizon = along.some(([x, y]) => isInside(plate.frame, x, y, 0));
-  const ticks = altitudeTicks(sky, plate);
+/** Half as far round the compass as the ground is drawn, and the step of its outline, degrees. */
+const groundHalfDeg = 100;
+const groundStepDeg = 1;
+
+/**
+ * The ground with the site's skyline, compass points and altitude ticks of a sky over a plate, for a target at
+ * an azimuth.
+ */
+export function standingUnder(
+  sky: LocalSky,
+  plate: Plate,
+  targetAzimuthRad: number,
+  skylinePoints: readonly SkylinePoint[],
+): Standing {
+  const skyline = skylineOf(skylinePoints);
+  const { along, level, below } = groundOutline(sky, plate, skyline, skylinePoints);
+  const isGround = (place: SkyPoint): boolean => {
+    const { altitudeRad, azimuthRad } = sky.altAz(place);
+    return altitudeRad < skyline(azimuthRad);
+  };
+  const showsGround = along.some(([x, y]) => isInside(plate.frame, x, y, 0));
+  const ticks = altitudeTicks(sky, plate, isGround);
   const zenith = zenithMark(sky, plate);
   const altitude = { marks: [...ticks.marks, ...zenith.marks], wishes: [...ticks.wishes, ...zenith.wishes] };
-  if (!showsHorizon) {
-    return { ...altitude, walls: [], isBelowGround: () => false, bars: () => false };
+  if (!showsGround) {
+    return { ...altitude, walls: [], isBelowGround: isGround, bars: () => false };
   }
   const shared = { of: null, layer: 'under', clipped: true } as const;
-  const walls: Line[] = along.slice(1).map((point, index) => [along[index]!, point]);
   const facing = compassPoint(targetAzimuthRad);
   const marks: Mark[] = [
     {
@@ -49,7 +56,7 @@ export function standingUnder(sky: LocalSky, plate: Plate, targetAzimuthRad: num
       role: 'ground',
       points: [...along, ...below],
       stroke: null,
-      fillGray: 0.92,
+      fillGray: 0.88,
     },
     {
       ...shared,
@@ -59,25 +66,19 @@ export function standingUnder(sky: LocalSky, plate: Plate, targetAzimuthRad: num
       stroke: { widthPt: 1.4, gray: 0 },
       fillGray: null,
     },
-    ...altitude.marks,
   ];
-  const wishes: LabelWish[] = [...altitude.wishes];
-  for (const point of compass) {
-    const spot = underHorizon(sky, plate, point.azimuthRad, point === facing ? 4.6 : 3.8);
-    if (spot === null) continue;
-    wishes.push({
-      text: point.letters,
-      of: point.word,
-      face: point.letters.length === 3 ? 'sans' : 'bold',
-      sizePt: point === facing ? 16 : point.letters.length === 3 ? 8 : 11,
-      gray: 0,
-      spacingPt: 0,
-      mayStray: false,
-      rank: labelRank.facing,
-      owner: null,
-      spots: spotAt(spot),
+  if (skylinePoints.length > 0) {
+    marks.push({
+      ...shared,
+      shape: 'polyline',
+      role: 'levelHorizon',
+      points: level,
+      stroke: { widthPt: 0.4, gray: 0.35, dashMm: [0.6, 0.8] },
+      fillGray: null,
     });
   }
+  marks.push(...altitude.marks);
+  const wishes: LabelWish[] = [...altitude.wishes, ...compassWishes(sky, plate, facing)];
   const pointer = pointerUnder(sky, plate, targetAzimuthRad);
   if (pointer !== null) {
     marks.push({
@@ -94,12 +95,65 @@ export function standingUnder(sky: LocalSky, plate: Plate, targetAzimuthRad: num
   return {
     marks,
     wishes,
-    walls,
-    isBelowGround: (place) => sky.altAz(place).altitudeRad < 0,
+    walls: along.slice(1).map((point, index) => [along[index]!, point]),
+    isBelowGround: isGround,
     bars: ([left, top, right, bottom], wish) =>
-      wish.rank !== labelRank.facing &&
-      sky.altAz(plate.toSky((left + right) / 2, (top + bottom) / 2)).altitudeRad < 0,
+      wish.rank !== labelRank.facing && isGround(plate.toSky((left + right) / 2, (top + bottom) / 2)),
   };
+}
+
+/** The skyline, the level horizon and a line far below it, as far round the compass as a sheet may show. */
+function groundOutline(
+  sky: LocalSky,
+  plate: Plate,
+  skyline: (azimuthRad: number) => number,
+  skylinePoints: readonly SkylinePoint[],
+): { along: SheetPoint[]; level: SheetPoint[]; below: SheetPoint[] } {
+  const centre = sky.altAz(plate.projection.centre).azimuthRad;
+  const aside: number[] = [];
+  for (let step = -groundHalfDeg; step <= groundHalfDeg; step += groundStepDeg) aside.push(step * degree);
+  for (const corner of skylineCorners(skylinePoints)) {
+    const turn = Math.atan2(Math.sin(corner - centre), Math.cos(corner - centre));
+    if (Math.abs(turn) < groundHalfDeg * degree) aside.push(turn);
+  }
+  aside.sort((one, other) => one - other);
+  const along: SheetPoint[] = [];
+  const level: SheetPoint[] = [];
+  const below: SheetPoint[] = [];
+  for (const turn of aside) {
+    const azimuth = centre + turn;
+    const at = plate.toSheet(sky.placeAt(skyline(azimuth), azimuth));
+    const flat = plate.toSheet(sky.placeAt(0, azimuth));
+    const under = plate.toSheet(sky.placeAt(-50 * degree, azimuth));
+    if (at !== null && flat !== null && under !== null) {
+      along.push(at);
+      level.push(flat);
+      below.unshift(under);
+    }
+  }
+  return { along, level, below };
+}
+
+/** The letters of the compass under the level horizon, the one to face larger. */
+function compassWishes(sky: LocalSky, plate: Plate, facing: CompassPoint): LabelWish[] {
+  return compass.flatMap((point) => {
+    const spot = underHorizon(sky, plate, point.azimuthRad, point === facing ? 4.6 : 3.8);
+    if (spot === null) return [];
+    return [
+      {
+        text: point.letters,
+        of: point.word,
+        face: point.letters.length === 3 ? 'sans' : 'bold',
+        sizePt: point === facing ? 16 : point.letters.length === 3 ? 8 : 11,
+        gray: 0,
+        spacingPt: 0,
+        mayStray: false,
+        rank: labelRank.facing,
+        owner: null,
+        spots: spotAt(spot),
+      } satisfies LabelWish,
+    ];
+  });
 }
 
 /** The direction on the sheet, a unit vector, from the horizon up at an azimuth. */
@@ -130,7 +184,11 @@ function pointerUnder(sky: LocalSky, plate: Plate, azimuthRad: number): SheetPoi
 }
 
 /** Ticks at both sides where the sky stands a whole number of tens of degrees high, named at the left. */
-function altitudeTicks(sky: LocalSky, plate: Plate): { marks: Mark[]; wishes: LabelWish[] } {
+function altitudeTicks(
+  sky: LocalSky,
+  plate: Plate,
+  isGround: (place: SkyPoint) => boolean,
+): { marks: Mark[]; wishes: LabelWish[] } {
   const marks: Mark[] = [];
   const wishes: LabelWish[] = [];
   const { frame } = plate;
@@ -148,6 +206,7 @@ function altitudeTicks(sky: LocalSky, plate: Plate): { marks: Mark[]; wishes: La
       const tens = Math.round((upper + lower) / 20) * 10;
       if (tens < 10 || (upper - tens) * (lower - tens) > 0 || upper === lower) continue;
       const at = yMm + (stepMm * (upper - tens)) / (upper - lower);
+      if (isGround(plate.toSky(edge, at))) continue;
       marks.push({
         shape: 'polyline',
         role: 'altitude',

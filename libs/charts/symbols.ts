@@ -36,6 +36,9 @@ export const symbolWords: Readonly<Record<SymbolKind, string>> = {
 /** Half the size of the symbol of an object too small to draw to scale, millimetres. */
 export const smallSymbolMm = 0.9;
 
+/** How far the strokes beside a double star's dot reach, millimetres. */
+export const doubleStrokeMm = 1.1;
+
 /**
  * The marks of one object: the shapes that printed star atlases share (common practice): ellipse for a galaxy,
  * dashed circle for an open cluster, crossed circle for a globular, circle with four spikes for a planetary,
@@ -110,8 +113,8 @@ export function symbolMarks(place: SymbolPlace): Mark[] {
       return [box(line), ellipse(dashed)];
     case 'doubleStar':
       return [
-        strokeLine([xMm - major - 1.1, yMm], [xMm - major, yMm]),
-        strokeLine([xMm + major, yMm], [xMm + major + 1.1, yMm]),
+        strokeLine([xMm - major - doubleStrokeMm, yMm], [xMm - major, yMm]),
+        strokeLine([xMm + major, yMm], [xMm + major + doubleStrokeMm, yMm]),
       ];
     case 'asterism':
       return [ellipse({ ...line, dashMm: [1.6, 0.5, 0.3, 0.5] })];

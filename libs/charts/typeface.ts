@@ -64,9 +64,6 @@ export function descentMm(sizePt: number): number {
 
 /** Signs that a face lacks and what stands for them. */
 const standIns: Readonly<Record<string, string>> = {
-  '−': '–',
-  '≈': '~',
-  '‑': '-',
   '\u202f': '\u00a0',
   '\t': ' ',
 };
@@ -89,11 +86,11 @@ export function printable(text: string, face: Face): string {
     .join('');
 }
 
-/** Breaks text into lines no wider than `widthMm`, at spaces; a longer word stands alone. */
+/** Breaks text into lines no wider than `widthMm`, at spaces (not at hard ones); a longer word stands alone. */
 export function wrapped(text: string, face: Face, sizePt: number, widthMm: number): string[] {
   const lines: string[] = [];
   let line = '';
-  for (const word of text.split(/\s+/).filter((part) => part !== '')) {
+  for (const word of text.split(/[ \t\n]+/).filter((part) => part !== '')) {
     const longer = line === '' ? word : `${line} ${word}`;
     if (line !== '' && textWidthMm(longer, face, sizePt) > widthMm) {
       lines.push(line);

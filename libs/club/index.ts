@@ -27,8 +27,17 @@ export {
   getTarget,
   listElementSets,
   listTargets,
+  type RenewedTarget,
   updateTarget,
 } from './targets/targets';
+export {
+  addElementReading,
+  addElementText,
+  elementNames,
+  ElementText,
+  type ElementWishes,
+  type LoadedElements,
+} from './targets/loadElements';
 export { ProgrammeInput } from './programmes/programmeInput';
 export { type NightProgramme, type ProgrammeItemView, type ProgrammeView } from './programmes/programmeView';
 export {
@@ -50,3 +59,5 @@ export { usualDatabaseFile } from './programVersion';
 export * from './sky';
 export * from './charts';
 export * from './packets';
+export * from './trust';
+export * from './changes';

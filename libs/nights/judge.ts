@@ -6,6 +6,7 @@ import { coarseInstants, type MeasuredTarget, measureTargets, type Workbench } f
 import { type ScoreWeights } from './programme';
 import { type JudgedEvening, type PartName, type ScorePart, type Showing } from './result';
 import { type EveningShares, eveningShares, roundPoints, scoreOf } from './score';
+import { showingCase, showingRange } from './range';
 import { type Season } from './season';
 import { type PreparedSite, trackAltitude } from './siteInstant';
 import { partWords, showingWords } from './words';
@@ -74,9 +75,14 @@ export function judgeEvening(
       moon: { illuminatedFraction: 0, upMinutes: 0 },
     };
   }
+  const { hours } = answer;
   const showings = programme.items.map((item, i) => {
     const measured = bench.targets[i]!;
-    return { ...showingOf(item.target.name, measured), why: showingWords(item, measured, zone) };
+    return {
+      ...showingOf(item.target.name, measured),
+      why: showingWords(item, measured, zone),
+      range: showingRange(bench, season, site, hours, i),
+    };
   });
   const minutes = (answer.hours.endMs - answer.hours.startMs) / 60_000;
   const words = partWords(
@@ -108,20 +114,14 @@ export function judgeEvening(
 const partNames: readonly PartName[] = ['programme', 'darkness', 'height', 'moon'];
 
 function unseen(target: string, why: string): Showing {
-  return { target, shown: false, minutes: 0, intervals: [], best: null, why };
+  return { target, shown: false, minutes: 0, intervals: [], best: null, why, range: null };
 }
 
-function showingOf(target: string, measured: MeasuredTarget): Omit<Showing, 'why'> {
-  const intervals = [];
-  for (let i = 0; i < measured.edges.length; i += 2) {
-    intervals.push({ startMs: measured.edges[i]!, endMs: measured.edges[i + 1]! });
-  }
+function showingOf(target: string, measured: MeasuredTarget): Omit<Showing, 'why' | 'range'> {
   const { best } = measured;
   return {
     target,
-    shown: measured.shown,
-    minutes: measured.totalMs / 60_000,
-    intervals,
+    ...showingCase(measured),
     best: Number.isNaN(best.utcMs)
       ? null
       : {

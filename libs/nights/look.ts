@@ -87,9 +87,9 @@ export function createEveningItem(): EveningItem {
 }
 
 /**
- * Fills the item of an evening. Its magnitude is taken at the middle of the public hours; its place is the
- * cubic through four places spread over them, within 0.001 arcsec of the track even for the Moon and six
- * hours.
+ * Fills the item of an evening. Its magnitude is taken at the middle of the public hours, fainter by
+ * `fainterBy`; its place is the cubic through four places spread over them, within 0.001 arcsec of the track
+ * even for the Moon and six hours.
  */
 export function setEveningItem(
   item: EveningItem,
@@ -97,6 +97,7 @@ export function setEveningItem(
   site: PreparedSite,
   index: number,
   hours: PublicHours,
+  fainterBy = 0,
 ): void {
   const { leastAltitudeRad, target } = season.programme.items[index]!;
   const track = season.tracks[index]!;
@@ -105,7 +106,7 @@ export function setEveningItem(
   item.isMoon = target.kind === 'solarSystem' && target.body === 'Moon';
   item.nearby = track.nearby;
   item.sinLeastAltitude = Math.sin(leastAltitudeRad);
-  item.magnitude = trackMagnitude(track, hours.startMs + length / 2);
+  item.magnitude = trackMagnitude(track, hours.startMs + length / 2) + fainterBy;
   const { extinctionMagPerAirmass } = site.site.sky;
   const thickest = extinctionMagPerAirmass * airmassOfSine(item.sinLeastAltitude);
   item.darkEnoughNl = brightestSkyShowing(season.limits[index]!, item.magnitude + thickest);

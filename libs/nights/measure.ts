@@ -100,6 +100,25 @@ export function measureTargets(
   }
 }
 
+/**
+ * Measures one target as if it were fainter by some magnitudes (negative: brighter), in the public hours that
+ * `measureTargets` measured last, whose instants it takes over.
+ */
+export function measureFainter(
+  bench: Workbench,
+  season: Season,
+  site: PreparedSite,
+  hours: PublicHours,
+  index: number,
+  fainterBy: number,
+): MeasuredTarget {
+  const measured = createMeasured();
+  bench.closely = false;
+  setEveningItem(bench.item, season, site, index, hours, fainterBy);
+  measureTarget(bench, season, site, hours, coarseCount(hours), bench.item, measured);
+  return measured;
+}
+
 function measureTarget(
   bench: Workbench,
   season: Season,

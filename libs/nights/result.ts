@@ -25,6 +25,23 @@ export interface BestView {
   readonly margin: number;
 }
 
+/** When a target is shown should it be brighter or fainter than its law says. */
+export interface ShowingCase {
+  readonly shown: boolean;
+  readonly minutes: number;
+  readonly intervals: readonly Interval[];
+}
+
+/** What the brightness of a comet or asteroid, which nobody knows well, does to its showing. */
+export interface ShowingRange {
+  /** How much brighter and fainter than its law the two cases are, magnitudes. */
+  readonly magnitudes: number;
+  readonly ifBrighter: ShowingCase;
+  readonly ifFainter: ShowingCase;
+  /** What changes, to stand after the showing's own times: 'from 21:40 if it runs a magnitude faint'. */
+  readonly words: string;
+}
+
 /** What an evening offers of one target. */
 export interface Showing {
   readonly target: string;
@@ -34,6 +51,8 @@ export interface Showing {
   /** Null when the target cannot be seen at any moment of the public hours. */
   readonly best: BestView | null;
   readonly why: string;
+  /** Null but for comets and asteroids with a magnitude law. */
+  readonly range: ShowingRange | null;
 }
 
 /** One evening at one site, judged against a programme. */

@@ -1,10 +1,14 @@
 import {
+  type BodyChange,
+  type BodyTrust,
   callOffEvent,
   CallOff,
   changeEvent,
   type Database,
   EventChange,
+  eventChanges,
   EventInput,
+  eventTrust,
   getEvent,
   listEvents,
   makeEvent,
@@ -38,6 +42,19 @@ export class EventsController {
   @ApiOperation({ summary: 'One event, with the evening it was made of and its history' })
   async get(@Param('id') id: string): Promise<EventJson> {
     return eventJson(await getEvent(this.database, id));
+  }
+
+  @Get(':id/trust')
+  @ApiOperation({ summary: "How far the places of the event's comets and asteroids can be trusted" })
+  trust(@Param('id') id: string): Promise<readonly BodyTrust[]> {
+    return eventTrust(this.database, id);
+  }
+
+  @Get(':id/changes')
+  @ApiOperation({ summary: 'What elements received since the evening was judged change in it' })
+  async changes(@Param('id') id: string): Promise<readonly BodyChange[]> {
+    await getEvent(this.database, id);
+    return (await eventChanges(this.database, id)).get(id) ?? [];
   }
 
   @Post()

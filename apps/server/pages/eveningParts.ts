@@ -1,5 +1,5 @@
 import { directionWords, moonSentence, timesWords } from '#club';
-import { clockWords, type JudgedEvening, type PartName, type Showing } from '#nights';
+import { clockWords, type JudgedEvening, type PartName, type Showing, type ShowingRange } from '#nights';
 import { html, type Html } from './html';
 
 const PART_WORDS: Readonly<Record<PartName, string>> = {
@@ -43,17 +43,19 @@ export function showingsTable(
 }
 
 function showingRow(showing: Showing, zone: string, gloss: string): Html {
-  const { target, shown, intervals, best, why } = showing;
+  const { target, shown, intervals, best, why, range } = showing;
   if (!shown) {
+    const hope = range?.ifBrighter.shown === true ? ` ${forecastWords(range)}` : '';
     return html`<tr>
       <th scope="row">${target}</th>
-      <td colspan="2">${why}</td>
+      <td colspan="2">${why}${hope}</td>
     </tr>`;
   }
+  const told = [gloss, range === null ? '' : forecastWords(range)].filter((part) => part !== '').join(' ');
   const words =
-    gloss !== '' &&
+    told !== '' &&
     html`<tr class="gloss">
-      <td colspan="3">${gloss}</td>
+      <td colspan="3">${told}</td>
     </tr>`;
   return html`<tr${words !== false && html` class="glossed"`}>
       <th scope="row">${target}</th>
@@ -61,6 +63,11 @@ function showingRow(showing: Showing, zone: string, gloss: string): Html {
       <td>${best !== null && `${clockWords(best.utcMs, zone)}, ${directionWords(showing)}`}</td>
     </tr>
     ${words}`;
+}
+
+/** What another brightness than foretold would change. */
+function forecastWords({ words }: ShowingRange): string {
+  return `Its brightness is a forecast: ${words}.`;
 }
 
 /** What follows date and site in the evening's line. */

@@ -1,11 +1,18 @@
 import { CAUTIONS, type ClubView, type EventView, plannedShowings, type TargetView } from '#club';
+import { bodyNotes } from './bodyNotes';
 import { showingsTable } from './eveningParts';
 import { chartLinks, eventForms, eventSentence, statusLine, whenAndWhere } from './eventParts';
 import { html, type Html } from './html';
+import { type EventNotes } from './keptNotes';
 import { pageFrame } from './pageFrame';
 
 /** One event for the public: what, where, when, what to bring, what to mind. */
-export function eventPage(event: EventView, club: ClubView, targets: readonly TargetView[]): string {
+export function eventPage(
+  event: EventView,
+  club: ClubView,
+  targets: readonly TargetView[],
+  notes: EventNotes,
+): string {
   const { site, zone, title, words, status } = event;
   const shown = plannedShowings(event);
   return pageFrame({
@@ -64,7 +71,7 @@ export function eventPage(event: EventView, club: ClubView, targets: readonly Ta
         </section>
         <section class="screen" aria-labelledby="club">
           <h2 id="club">For the club</h2>
-          ${statusLine(event)} ${chartLinks(event)} ${eventForms(event)}
+          ${statusLine(event)} ${bodyNotes(notes)} ${chartLinks(event)} ${eventForms(event)}
         </section>
       </main>`,
   });

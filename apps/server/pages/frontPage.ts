@@ -1,5 +1,6 @@
-import { type ClubView, dateWords, type EventView, type ProgrammeView, type Ranking } from '#club';
+import { type BodyChange, type ClubView, dateWords, type EventView, type ProgrammeView, type Ranking } from '#club';
 import { type JudgedEvening } from '#nights';
+import { changeNotes } from './bodyNotes';
 import { offerWords, partsList, showingsTable } from './eveningParts';
 import { chartLinks, eventForms, eventSentence, statusLine } from './eventParts';
 import { html, type Html } from './html';
@@ -10,6 +11,8 @@ import { type PageSearch } from './seasonPages';
 export interface FrontPage {
   readonly club: ClubView;
   readonly events: readonly EventView[];
+  /** What newer elements change in events to come, by the events' ids. */
+  readonly changes: ReadonlyMap<string, readonly BodyChange[]>;
   readonly programmes: readonly ProgrammeView[];
   readonly search: PageSearch | null;
   /** Null while the search still runs. */
@@ -166,14 +169,14 @@ function searchForm({ from, to, programmeName }: PageSearch, programmes: readonl
   </form>`;
 }
 
-function eventList({ events, club }: FrontPage): Html {
+function eventList({ events, changes, club }: FrontPage): Html {
   return html`<ul class="events">
     ${events.map(
       (event) =>
         html`<li>
           <h3><a href="/events/${event.id}">${event.title}</a></h3>
           <p class="line">${eventSentence(event, club.locale)}</p>
-          ${statusLine(event)}
+          ${statusLine(event)} ${changeNotes(changes.get(event.id) ?? [])}
           <details>
             <summary>
               Sheets and steps<span class="hidden">

@@ -21,6 +21,7 @@ import { OpenDatabase } from '../database';
 import { header, type Reply, type Request } from '../http';
 import { eventPage } from './eventPage';
 import { frontPage } from './frontPage';
+import { KeptNotes } from './keptNotes';
 import { SeasonPages } from './seasonPages';
 
 const SEASON_DAYS = 180;
@@ -49,6 +50,7 @@ export class PagesController {
   constructor(
     @OpenDatabase() private readonly database: Database,
     @Inject(SeasonPages) private readonly seasons: SeasonPages,
+    @Inject(KeptNotes) private readonly notes: KeptNotes,
   ) {}
 
   @Get()
@@ -80,13 +82,19 @@ export class PagesController {
     const ranking = search === null ? null : await this.seasons.find(search, PATIENCE_MS);
     const address = club.publicAddress ?? `http://${header(request, 'host') ?? 'localhost'}`;
     const calendarAddress = `${address}/calendar.ics`;
-    send(reply, frontPage({ club, events, programmes, search, ranking, calendarAddress, nowMs }));
+    const changes = await this.notes.allChanges();
+    send(reply, frontPage({ club, events, changes, programmes, search, ranking, calendarAddress, nowMs }));
   }
 
   @Get('events/:id')
   async event(@Param('id') id: string, @Res() reply: Reply): Promise<void> {
     const event = await getEvent(this.database, id);
-    send(reply, eventPage(event, await getClub(this.database), await listTargets(this.database)));
+    const [club, targets, notes] = await Promise.all([
+      getClub(this.database),
+      listTargets(this.database),
+      this.notes.ofEvent(event),
+    ]);
+    send(reply, eventPage(event, club, targets, notes));
   }
 
   @Post('events')

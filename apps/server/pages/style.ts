@@ -42,6 +42,7 @@ input, select, button { font: inherit; color: inherit; background: transparent; 
 button { border-color: var(--accent); color: var(--accent); cursor: pointer; }
 button:hover { background: var(--accent); color: var(--paper); }
 .status { font-weight: 700; }
+.notice { border-left: 3px solid var(--accent); padding-left: .8rem; }
 .events { list-style: none; margin: 1rem 0 0; padding: 0; }
 .events > li { border-top: 1px solid var(--rule); padding: .8rem 0 1rem; }
 code { font-family: inherit; border-bottom: 1px solid var(--rule); overflow-wrap: anywhere; }

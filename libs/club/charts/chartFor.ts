@@ -8,13 +8,17 @@ import {
   renderPdf,
   renderSvg,
   type Scene,
+  type SkylinePoint,
   usualFieldDeg,
 } from '#charts';
-import { type Observer, type Place, place, type SkyTarget, toDeg } from '#sky';
+import { type Observer, type Place, place, positionAngle, type SkyTarget, toDeg } from '#sky';
+import { DateTime } from 'luxon';
 import { problem } from '../clubProblem';
 import { type NamedTarget } from '../sky/namedTarget';
-import { chartPath } from './chartPath';
+import { chartInset } from './chartInset';
+import { chartPath, pathPoint } from './chartPath';
 import { chartWords } from './chartWords';
+import { clockDate, whenUp } from './whenUp';
 
 /** A finder chart as it is asked for: what, from where, when and how. */
 export interface ChartOrder {
@@ -29,11 +33,19 @@ export interface ChartOrder {
   readonly fieldDeg: number | null;
   readonly orientation: Orientation;
   readonly paper: Paper;
+  /** The site's skyline, drawn at the foot of an eye chart; left out where none is known. */
+  readonly skyline?: readonly SkylinePoint[];
+  /** The public hours, whose ends a moving target's sheet shows. */
+  readonly publicHours?: { readonly startUtcMs: number; readonly endUtcMs: number };
+  /** Width of the finder's field in degrees; left out: the usual one. */
+  readonly finderFieldDeg?: number;
   /** For what it is printed, such as an event's title; null for a chart by itself. */
   readonly occasion: string | null;
   /** When it is computed, for the foot line. */
   readonly computedUtcMs: number;
   readonly programVersion: string;
+  /** The foot line of a sheet of a packet; left out: the chart's own. */
+  readonly foot?: string;
 }
 
 /** What a finished chart is sent or saved as. */
@@ -53,6 +65,7 @@ const SUN_CLEARANCE_DEG = 15;
 export function chartScene(order: ChartOrder): Scene {
   const seen = place(order.target.sky, order.utcMs, order.observer);
   refuseNearSun(order, seen);
+  refuseBelowHorizon(order, seen);
   return buildScene(loadStars(), deepSkyObjects(), constellationFigures(), chartRequest(order, seen));
 }
 
@@ -72,6 +85,8 @@ function chartRequest(order: ChartOrder, seen: Place): ChartRequest {
   const { target, observer, utcMs, scale } = order;
   const { deepSky, sky } = target;
   const fieldDeg = order.fieldDeg ?? usualFieldDeg[scale];
+  const next = nextSheet(scale, fieldDeg);
+  const inset = chartInset(target, seen, utcMs, observer);
   const sizeArcmin = seen.angularDiameterRad === null ? 0 : toDeg(seen.angularDiameterRad) * 60;
   return {
     scale,
@@ -87,11 +102,58 @@ function chartRequest(order: ChartOrder, seen: Place): ChartRequest {
       majorArcmin: deepSky?.majorArcmin ?? sizeArcmin,
       minorArcmin: deepSky?.minorArcmin ?? sizeArcmin,
       positionAngleDeg: deepSky?.positionAngleDeg ?? null,
+      tailDeg: target.kind === 'comet' ? tailAngleDeg(order, seen) : null,
     },
-    path: chartPath(sky, observer, order.zone, utcMs, fieldDeg),
-    view: { utcMs, latitudeRad: observer.latitudeRad, longitudeRad: observer.longitudeRad },
+    path: chartPath(sky, observer, order.zone, utcMs, fieldDeg, sizeArcmin / 60),
+    ...publicHoursOn(order),
+    view: {
+      utcMs,
+      latitudeRad: observer.latitudeRad,
+      longitudeRad: observer.longitudeRad,
+      clock: DateTime.fromMillis(utcMs, { zone: order.zone }).toFormat('HH:mm'),
+    },
+    ...(next === null ? {} : { next }),
+    ...(inset === null ? {} : { inset }),
+    ...(order.skyline === undefined ? {} : { skyline: order.skyline }),
+    ...(order.finderFieldDeg === undefined ? {} : { finderFieldDeg: order.finderFieldDeg }),
     words: chartWords(order, seen, CATALOGUE_VERSION),
   };
+}
+
+/** The narrower sheet that follows one of a scale, where its field is narrower indeed. */
+function nextSheet(scale: ChartScale, fieldDeg: number): NonNullable<ChartRequest['next']> | null {
+  if (scale === 'eyepiece') return null;
+  const next = scale === 'eye' ? 'binocular' : 'eyepiece';
+  return usualFieldDeg[next] < fieldDeg ? { scale: next, fieldDeg: usualFieldDeg[next] } : null;
+}
+
+function publicHoursOn(order: ChartOrder): Pick<ChartRequest, 'publicHours'> {
+  const { publicHours, target, observer, zone } = order;
+  if (publicHours === undefined || target.sky.kind === 'fixed') return {};
+  return {
+    publicHours: {
+      opens: pathPoint(target.sky, observer, zone, publicHours.startUtcMs, 'HH:mm'),
+      closes: pathPoint(target.sky, observer, zone, publicHours.endUtcMs, 'HH:mm'),
+    },
+  };
+}
+
+/** A comet's tail points away from the Sun: its position angle, degrees. */
+function tailAngleDeg({ utcMs, observer }: ChartOrder, { astrometric }: Place): number {
+  const sun = place(SUN, utcMs, observer).astrometric;
+  return toDeg(positionAngle(astrometric.raRad, astrometric.decRad, sun.raRad, sun.decRad) + Math.PI) % 360;
+}
+
+/** Throws for an eye chart of a target below the level horizon, saying when it is up next. */
+function refuseBelowHorizon(order: ChartOrder, seen: Place): void {
+  if (order.scale !== 'eye' || seen.horizontal === null || seen.horizontal.altitudeRad >= 0) return;
+  throw problem(
+    'invalid',
+    'at',
+    new Date(order.utcMs).toISOString(),
+    `at was ${clockDate(order.utcMs, order.zone)}, when ${order.target.sky.name} stands ` +
+      `${toDeg(-seen.horizontal.altitudeRad).toFixed(1)} degrees below the horizon; ${whenUp(order)}.`,
+  );
 }
 
 function refuseNearSun({ target, observer, utcMs }: ChartOrder, seen: Place): void {

@@ -56,6 +56,8 @@ export async function chartForEvent(database: Database, request: EventChartReque
     fieldDeg: request.fieldDeg ?? null,
     orientation: request.orientation ?? 'upright',
     paper: request.paper ?? 'a4',
+    skyline: site.horizon,
+    publicHours: { startUtcMs: Date.parse(event.startsAt), endUtcMs: Date.parse(event.endsAt) },
     occasion: event.title,
     computedUtcMs: database.now().getTime(),
     programVersion: programVersion(),
@@ -64,7 +66,7 @@ export async function chartForEvent(database: Database, request: EventChartReque
 }
 
 /** A target of the club with all that is known of it. */
-async function clubTarget(database: Database, name: string): Promise<NamedTarget> {
+export async function clubTarget(database: Database, name: string): Promise<NamedTarget> {
   const view = await getTarget(database, name);
   const sky = await getSkyTarget(database, name);
   const deepSky = view.kind === 'deepSky' ? findDeepSky(view.catalogueId) : null;

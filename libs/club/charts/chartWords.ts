@@ -3,6 +3,8 @@ import { compassPoint } from '#nights';
 import { HOUR, type Place, toDeg, utcMsToTtJd } from '#sky';
 import { DateTime } from 'luxon';
 import { type ChartOrder } from './chartFor';
+import { lookNote } from './lookNote';
+import { motionNote } from './motionNote';
 
 /** The words round a chart: for what, where and when it holds, and from what it was computed. */
 export function chartWords(order: ChartOrder, seen: Place, catalogueVersion: string): ChartWords {
@@ -11,16 +13,22 @@ export function chartWords(order: ChartOrder, seen: Place, catalogueVersion: str
   return {
     title: titleOf(order),
     subtitle: [order.occasion, order.siteName, when].filter((part) => part !== null).join(' · '),
-    notes: [placeNote(seen), ...brightnessNote(order, seen), ...elementsNote(order)],
+    notes: [
+      placeNote(seen),
+      [...brightnessNote(order, seen), ...lookNote(order, seen), ...motionNote(order)].join(' '),
+      ...elementsNote(order),
+    ].filter((note) => note !== ''),
     cautions: cautions(seen),
-    foot: `Duskwright ${order.programVersion} · star catalogue ${catalogueVersion} · computed ${DateTime.fromMillis(order.computedUtcMs, { zone: 'utc' }).toFormat("yyyy-LL-dd HH:mm 'UTC'")}`,
+    foot:
+      order.foot ??
+      `Duskwright ${order.programVersion} · star catalogue ${catalogueVersion} · computed ${DateTime.fromMillis(order.computedUtcMs, { zone: 'utc' }).toFormat("yyyy-LL-dd HH:mm 'UTC'")}`,
   };
 }
 
 function titleOf({ target }: ChartOrder): string {
   const { deepSky, sky } = target;
   const [other] = deepSky?.otherNames.filter((name) => !/^(NGC|IC|M) \d/.test(name)) ?? [];
-  return other === undefined ? sky.name : `${sky.name}, ${other}`;
+  return other === undefined ? sky.name : `${sky.name}, ${other.replaceAll("'", '’')}`;
 }
 
 function placeNote({ astrometric, horizontal }: Place): string {
@@ -35,10 +43,10 @@ function placeNote({ astrometric, horizontal }: Place): string {
 function brightnessNote({ target }: ChartOrder, { magnitude, magnitudeRange }: Place): string[] {
   if (magnitude === null) return [];
   if (target.kind === 'comet' && magnitudeRange !== null) {
-    const [bright, faint] = magnitudeRange.map((value) => value.toFixed(1));
-    return [`Total magnitude about ${magnitude.toFixed(1)}; comets often run ${bright!} to ${faint!}.`];
+    const [bright, faint] = magnitudeRange.map(signed);
+    return [`Total magnitude about ${signed(magnitude)}; comets often run ${bright!} to ${faint!}.`];
   }
-  return [`Magnitude ${magnitude.toFixed(1)}.`];
+  return [`Magnitude ${signed(magnitude)}.`];
 }
 
 function elementsNote({ target, utcMs }: ChartOrder): string[] {
@@ -49,7 +57,7 @@ function elementsNote({ target, utcMs }: ChartOrder): string[] {
   const epoch = DateTime.fromMillis((set.epochTtJd - 2_440_587.5) * 86_400_000, { zone: 'utc' });
   const age = Math.round(utcMsToTtJd(utcMs) - set.epochTtJd);
   return [
-    `Orbital elements of epoch ${epoch.toFormat('yyyy-LL-dd')}${source}, ${Math.abs(age)} days ${age < 0 ? 'after' : 'before'} this chart's hour; two-body motion.`,
+    `Orbital elements of epoch ${epoch.toFormat('yyyy-LL-dd')}${source}, ${Math.abs(age)} days ${age < 0 ? 'after' : 'before'} this chart’s hour; ${motionWords(target)}.`,
   ];
 }
 
@@ -71,4 +79,16 @@ function rightAscension(rad: number): string {
 function declination(rad: number): string {
   const minutes = Math.round(Math.abs(toDeg(rad)) * 60);
   return `${rad < 0 ? '−' : '+'}${Math.floor(minutes / 60)}° ${String(minutes % 60).padStart(2, '0')}′`;
+}
+
+/** "8.3", "−2.5". */
+function signed(value: number): string {
+  return value.toFixed(1).replace('-', '−');
+}
+
+/** By what law a body was moved from its elements' epoch. */
+function motionWords({ sky }: ChartOrder['target']): string {
+  return sky.kind === 'orbit' && sky.motion !== undefined
+    ? 'moved on under the planets’ pull'
+    : 'two-body motion';
 }

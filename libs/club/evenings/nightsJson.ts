@@ -1,4 +1,4 @@
-import { type JudgedEvening } from '#nights';
+import { type Interval, type JudgedEvening, type ShowingRange } from '#nights';
 import { type Ranking } from './seasonSearch';
 
 /** A ranking as other programs read it: instants as ISO UTC. */
@@ -21,10 +21,11 @@ export function eveningJson({ publicHours, showings, ...evening }: JudgedEvening
   return {
     ...evening,
     publicHours: publicHours && { start: iso(publicHours.startMs), end: iso(publicHours.endMs) },
-    showings: showings.map(({ intervals, best, ...showing }) => ({
+    showings: showings.map(({ intervals, best, range, ...showing }) => ({
       ...showing,
-      intervals: intervals.map(({ startMs, endMs }) => ({ start: iso(startMs), end: iso(endMs) })),
+      intervals: intervals.map(isoInterval),
       best: best && { at: iso(best.utcMs), ...withoutInstant(best) },
+      range: range && rangeJson(range),
     })),
   };
 }
@@ -36,6 +37,18 @@ function withoutInstant({
   margin,
 }: NonNullable<JudgedEvening['showings'][number]['best']>) {
   return { altitudeDeg, azimuthDeg, skyBrightness, margin };
+}
+
+function rangeJson({ ifBrighter, ifFainter, ...range }: ShowingRange) {
+  return {
+    ...range,
+    ifBrighter: { ...ifBrighter, intervals: ifBrighter.intervals.map(isoInterval) },
+    ifFainter: { ...ifFainter, intervals: ifFainter.intervals.map(isoInterval) },
+  };
+}
+
+function isoInterval({ startMs, endMs }: Interval) {
+  return { start: iso(startMs), end: iso(endMs) };
 }
 
 function iso(utcMs: number): string {

@@ -1,5 +1,6 @@
 import { clockWords, type Interval, type JudgedEvening, type Showing } from '#nights';
 import { DateTime } from 'luxon';
+import { pointWords } from '../sky/pointWords';
 
 /** A calendar date in words: 'Saturday 14 March', with the year where `withYear` asks for it. */
 export function dateWords(date: string, locale: string, withYear = false): string {
@@ -39,25 +40,6 @@ export function timesWords(intervals: readonly Interval[], zone: string): string
     .join(' and ');
 }
 
-const POINTS = [
-  'north',
-  'north-north-east',
-  'north-east',
-  'east-north-east',
-  'east',
-  'east-south-east',
-  'south-east',
-  'south-south-east',
-  'south',
-  'south-south-west',
-  'south-west',
-  'west-south-west',
-  'west',
-  'west-north-west',
-  'north-west',
-  'north-north-west',
-] as const;
-
 /** Above this a compass direction says little. */
 const OVERHEAD_DEG = 80;
 
@@ -69,5 +51,5 @@ export function directionWords({ best }: Showing): string {
   if (best === null) return 'not to be seen';
   const height = `${String(Math.round(best.altitudeDeg))} degrees high`;
   if (best.altitudeDeg >= OVERHEAD_DEG) return `${height}, almost overhead`;
-  return `${height} in the ${POINTS[Math.round(best.azimuthDeg / 22.5) % 16]!}`;
+  return `${height} in the ${pointWords(best.azimuthDeg)}`;
 }

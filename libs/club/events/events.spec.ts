@@ -30,6 +30,7 @@ function judged(date: string, change: Partial<JudgedEvening> = {}): JudgedEvenin
           margin: 9.1,
         },
         why: 'From 19:10 to 20:10.',
+        range: null,
       },
     ],
     moon: { illuminatedFraction: 0.12, upMinutes: 0 },

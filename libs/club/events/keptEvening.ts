@@ -2,6 +2,7 @@ import { type JudgedEvening } from '#nights';
 import { z } from 'zod';
 
 const interval = z.object({ startMs: z.number(), endMs: z.number() });
+const showingCase = z.object({ shown: z.boolean(), minutes: z.number(), intervals: z.array(interval) });
 
 /** A judged evening as the database keeps it, checked on the way in and out. */
 const KeptEvening: z.ZodType<JudgedEvening> = z.object({
@@ -37,6 +38,16 @@ const KeptEvening: z.ZodType<JudgedEvening> = z.object({
         })
         .nullable(),
       why: z.string(),
+      /** Evenings kept before ranges were judged have none. */
+      range: z
+        .object({
+          magnitudes: z.number(),
+          ifBrighter: showingCase,
+          ifFainter: showingCase,
+          words: z.string(),
+        })
+        .nullable()
+        .default(null),
     }),
   ),
   moon: z.object({ illuminatedFraction: z.number(), upMinutes: z.number() }),

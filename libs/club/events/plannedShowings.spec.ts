@@ -14,6 +14,7 @@ const showing: Showing = {
   ],
   best: { utcMs: at('18:10'), altitudeDeg: 41, azimuthDeg: 134, skyBrightness: 20.9, margin: 9 },
   why: '',
+  range: null,
 };
 
 function planned(startsAt: string, endsAt: string, showings: readonly Showing[] = [showing]) {

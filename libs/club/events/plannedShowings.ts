@@ -3,7 +3,8 @@ import { type EventView } from './eventView';
 
 /**
  * What is shown while the event lasts: the evening's showings inside the event's own hours, which may have been
- * moved since the evening was judged. A best moment outside them is left out.
+ * moved since the evening was judged. A best moment outside them is left out, and so is what another brightness
+ * would change where the hours cut a showing short.
  */
 export function plannedShowings(event: EventView): readonly Showing[] {
   const startMs = Date.parse(event.startsAt);
@@ -16,7 +17,10 @@ export function plannedShowings(event: EventView): readonly Showing[] {
     const minutes = intervals.reduce((sum, part) => sum + (part.endMs - part.startMs) / 60_000, 0);
     const kept =
       best !== null && best.utcMs >= startMs - HALF_MINUTE_MS && best.utcMs <= endMs + HALF_MINUTE_MS;
-    return [{ ...showing, intervals, minutes, best: kept ? best : null }];
+    const whole = showing.minutes - minutes <= 1;
+    return [
+      { ...showing, intervals, minutes, best: kept ? best : null, range: whole ? showing.range : null },
+    ];
   });
 }
 

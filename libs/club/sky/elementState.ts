@@ -1,22 +1,17 @@
 import { type ElementSet, findBody } from '#elements';
 import {
-  ARCSEC,
   eclipticToEquatorial,
   equatorialToEcliptic,
-  fromSpherical,
   heliocentricState,
   motionPlace,
   type Observer,
-  place,
-  positionAngle,
-  separation,
-  toDeg,
   ttJdToUtcMs,
   type Vector,
 } from '#sky';
 import { problem } from '../clubProblem';
 import { type NamedTarget, orbitTarget } from './namedTarget';
 import { perturbing, type Perturbing } from './perturbing';
+import { placeShift, type PlaceShift } from './placeShift';
 
 /** Heliocentric place of a body in au, J2000, without light time. */
 export interface ElementState {
@@ -46,14 +41,9 @@ export function elementState(
   return { heliocentricEcliptic: position, heliocentricEquatorial: eclipticToEquatorial(position) };
 }
 
-/** How far a body's new elements move it from where the old ones put it. */
-export interface ElementShift {
+/** How far a body's new elements move it from where the old ones put it, and what of it a chart shows. */
+export interface ElementShift extends PlaceShift {
   readonly body: string;
-  readonly shiftArcsec: number;
-  /** Direction of the shift on the sky, from north through east. */
-  readonly positionAngleDeg: number;
-  /** New less old; null where either has no magnitude law. */
-  readonly magnitudeChange: number | null;
 }
 
 /** The shift of every body that both lists hold, from a place at a UTC instant; and those only one holds. */
@@ -72,28 +62,21 @@ export function compareElements(
   const known = new Set(paired.map(({ old }) => old));
   return {
     bodies: paired.flatMap(({ set, old }) =>
-      old === null ? [] : [shift(old, set, observer, utcMs, perturbed)],
+      old === null
+        ? []
+        : [
+            {
+              body: set.label,
+              ...placeShift(
+                perturbed(orbitTarget(old), utcMs),
+                perturbed(orbitTarget(set), utcMs),
+                utcMs,
+                observer,
+              ),
+            },
+          ],
     ),
     onlyOld: before.filter((set) => !known.has(set)).map(({ label }) => label),
     onlyNew: paired.filter(({ old }) => old === null).map(({ set }) => set.label),
-  };
-}
-
-function shift(
-  old: ElementSet,
-  renewed: ElementSet,
-  observer: Observer,
-  utcMs: number,
-  perturbed: Perturbing,
-): ElementShift {
-  const from = place(perturbed(orbitTarget(old), utcMs), utcMs, observer);
-  const to = place(perturbed(orbitTarget(renewed), utcMs), utcMs, observer);
-  const a = from.astrometric;
-  const b = to.astrometric;
-  return {
-    body: renewed.label,
-    shiftArcsec: separation(fromSpherical(a.raRad, a.decRad), fromSpherical(b.raRad, b.decRad)) / ARCSEC,
-    positionAngleDeg: toDeg(positionAngle(a.raRad, a.decRad, b.raRad, b.decRad)),
-    magnitudeChange: from.magnitude === null || to.magnitude === null ? null : to.magnitude - from.magnitude,
   };
 }

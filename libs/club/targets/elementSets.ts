@@ -64,9 +64,9 @@ export function completedSet(
 }
 
 /** A complete set as a row, without its owner, number and time of receipt. */
-export function elementSetColumns(set: ElementSet, input: z.output<typeof ElementSetInput>) {
+export function elementSetColumns(set: ElementSet, source: string) {
   return {
-    source: input.source,
+    source,
     designation: set.designation,
     bodyKind: set.kind,
     epochTtJd: set.epochTtJd,

@@ -1,5 +1,5 @@
 import { findDeepSky } from '#catalogue';
-import { SOLAR_BODIES, type SkyTarget, type SolarBody, toRad } from '#sky';
+import { type OrbitTarget, SOLAR_BODIES, type SkyTarget, type SolarBody, toRad } from '#sky';
 import { type Prisma } from '../database/generated/client';
 import { brightness, elementSetView, type ElementSetView, orbitalElements } from './elementSets';
 
@@ -114,19 +114,25 @@ export function skyTarget(row: TargetRow): SkyTarget {
         majorArcmin: row.majorArcmin!,
         minorArcmin: row.minorArcmin!,
       };
-    case 'orbit': {
-      const set = newestSet(row);
-      return {
-        kind: 'orbit',
-        name,
-        elements: orbitalElements(set),
-        brightness: brightness(set),
-        comaArcmin: row.comaArcmin ?? 0,
-      };
-    }
+    case 'orbit':
+      return orbitTargetOf(row, newestSet(row));
     default:
       throw unreadable(row, `kind "${row.kind}"`);
   }
+}
+
+/** A target on an orbit as one of its element sets moves it. */
+export function orbitTargetOf(
+  { name, comaArcmin }: Pick<TargetRow, 'name' | 'comaArcmin'>,
+  set: Prisma.ElementSetModel,
+): OrbitTarget {
+  return {
+    kind: 'orbit',
+    name,
+    elements: orbitalElements(set),
+    brightness: brightness(set),
+    comaArcmin: comaArcmin ?? 0,
+  };
 }
 
 /** The first of its names that is not a catalogue number. */

@@ -2,14 +2,16 @@ import { findDeepSky } from '#catalogue';
 import { type SkyTarget } from '#sky';
 import { type z } from 'zod';
 import { problem } from '../clubProblem';
-import { type Prisma } from '../database/generated/client';
+import { type ChangeNotice } from '../changes/changeNotice';
 import { type Database } from '../database/openDatabase';
 import { checked, valueInWords } from '../input/checked';
 import { refuseTakenName, requireNamed } from '../input/named';
 import { clubId } from '../settings/club';
 import { ElementSetInput } from './elementSetInput';
 import { completedSet, elementSetColumns, elementSetView, type ElementSetView } from './elementSets';
+import { keepSets } from './keepSets';
 import { TargetChange, TargetInput } from './targetInput';
+import { orbitRow, targetNames, targetRow } from './targetRows';
 import { skyTarget, targetParts, targetView, type TargetView } from './targetView';
 
 /** Enters a target; one that moves on an orbit together with its first element set. */
@@ -17,7 +19,7 @@ export async function createTarget(database: Database, input: TargetInput): Prom
   const columns = targetColumns(checked(TargetInput, input), database.now());
   return database.client.$transaction(async (tx) => {
     const club = await clubId(tx);
-    refuseTakenName(await names(tx, club), columns.name, 'target');
+    refuseTakenName(await targetNames(tx, club), columns.name, 'target');
     const now = database.now();
     return targetView(
       await tx.target.create({
@@ -36,7 +38,7 @@ export async function updateTarget(
 ): Promise<TargetView> {
   const { name, gloss, comaArcmin } = checked(TargetChange, change);
   return database.client.$transaction(async (tx) => {
-    const all = await names(tx, await clubId(tx));
+    const all = await targetNames(tx, await clubId(tx));
     const { id, kind } = requireNamed(all, target, 'target', 'target');
     if (name !== undefined) refuseTakenName(all, name, 'target', id);
     if (comaArcmin !== undefined && kind !== 'orbit') {
@@ -57,36 +59,29 @@ export async function updateTarget(
   });
 }
 
-/** Adds a newer element set to a target on an orbit (id or name). The older ones are kept. */
+/** What became of newer elements: the target as it is now, the set, and what it changes in the coming evenings. */
+export interface RenewedTarget {
+  readonly target: TargetView;
+  readonly set: ElementSetView;
+  /** Null for a target that had no set before. */
+  readonly change: ChangeNotice | null;
+}
+
+/**
+ * Adds a newer element set to a target on an orbit (id or name); the older ones are kept. A set that cannot be
+ * followed to the coming evenings is refused.
+ */
 export async function addElementSet(
   database: Database,
   target: string,
   input: ElementSetInput,
-): Promise<ElementSetView> {
+): Promise<RenewedTarget> {
   const fields = checked(ElementSetInput, input);
-  return database.client.$transaction(async (tx) => {
-    const { id, kind, name } = requireNamed(await names(tx, await clubId(tx)), target, 'target', 'target');
-    if (kind !== 'orbit') {
-      throw problem(
-        'conflict',
-        'target',
-        target,
-        `${name} does not move on an orbit; it takes no element set.`,
-      );
-    }
-    const set = completedSet(fields, name, '');
-    const last = await tx.elementSet.findFirst({ where: { targetId: id }, orderBy: { number: 'desc' } });
-    return elementSetView(
-      await tx.elementSet.create({
-        data: {
-          targetId: id,
-          number: (last?.number ?? 0) + 1,
-          receivedAt: database.now(),
-          ...elementSetColumns(set, fields),
-        },
-      }),
-    );
-  });
+  const row = await orbitRow(database, target);
+  const { sets, change } = await keepSets(database, row, [
+    elementSetColumns(completedSet(fields, row.name, ''), fields.source),
+  ]);
+  return { target: await getTarget(database, row.id), set: sets[0]!, change };
 }
 
 /** Every element set of a target (id or name), newest first. */
@@ -95,7 +90,7 @@ export async function listElementSets(
   target: string,
 ): Promise<readonly ElementSetView[]> {
   const { client } = database;
-  const { id } = requireNamed(await names(client, await clubId(client)), target, 'target', 'target');
+  const { id } = requireNamed(await targetNames(client, await clubId(client)), target, 'target', 'target');
   const rows = await client.elementSet.findMany({ where: { targetId: id }, orderBy: { number: 'desc' } });
   return rows.map(elementSetView);
 }
@@ -118,20 +113,6 @@ export async function getTarget(database: Database, target: string): Promise<Tar
 /** One target by id or name, as it is reckoned with. */
 export async function getSkyTarget(database: Database, target: string): Promise<SkyTarget> {
   return skyTarget(await targetRow(database, target));
-}
-
-async function targetRow(database: Database, target: string) {
-  const { client } = database;
-  const { id } = requireNamed(await names(client, await clubId(client)), target, 'target', 'target');
-  return client.target.findUniqueOrThrow({ where: { id }, include: targetParts });
-}
-
-function names(client: Prisma.TransactionClient, club: string) {
-  return client.target.findMany({
-    where: { clubId: club },
-    select: { id: true, name: true, kind: true },
-    orderBy: { name: 'asc' },
-  });
 }
 
 function targetColumns(fields: z.output<typeof TargetInput>, now: Date) {
@@ -157,7 +138,7 @@ function targetColumns(fields: z.output<typeof TargetInput>, now: Date) {
     case 'orbit': {
       const { elements, ...rest } = fields;
       const set = completedSet(elements, fields.name, 'elements');
-      const first = { number: 1, receivedAt: now, ...elementSetColumns(set, elements) };
+      const first = { number: 1, receivedAt: now, ...elementSetColumns(set, elements.source) };
       return { ...rest, elementSets: { create: [first] } };
     }
   }

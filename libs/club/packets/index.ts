@@ -1,0 +1,3 @@
+export { PacketInput } from './packetInput';
+export { type PacketView, listPackets, type PrintedPacket, printPacket } from './packets';
+export { closePacketPool, type PacketWatch } from './packetPool';
