@@ -55,7 +55,9 @@ export function addElementsLoad(elements: Command): void {
 
   elements
     .command('changes')
-    .description("what a target's newest element set changes in the coming evenings, beside the one before it")
+    .description(
+      "what a target's newest element set changes in the coming evenings, beside the one before it",
+    )
     .option('--target <NAME>', 'the target of the club')
     .option('--db <FILE>', 'another database')
     .option('--json', 'print JSON')

@@ -80,6 +80,9 @@ function inWords(evening: JudgedEvening): string {
   return [
     `${day} at ${evening.site}, ${hours}: ${evening.score.toFixed(1)} points, ${evening.shown} of ${evening.of} targets`,
     ...evening.parts.map(({ name, points, of, why }) => `  ${name} ${points.toFixed(1)} of ${of}: ${why}`),
-    ...evening.showings.map(({ target, shown, why }) => `  ${shown ? '+' : '-'} ${target}: ${why}`),
+    ...evening.showings.map(
+      ({ target, shown, why, range }) =>
+        `  ${shown ? '+' : '-'} ${target}: ${why}${range?.matters === true ? ` Its brightness is a forecast: ${range.words}.` : ''}`,
+    ),
   ].join('\n');
 }

@@ -39,6 +39,8 @@ export interface PacketTarget {
   /** In the middle of the event, for the map of the sky. */
   readonly atMiddle: Standing;
   readonly facts: TargetFacts;
+  /** What a brightness other than expected would change, after its times: 'from 21:40 if it runs faint'. */
+  readonly uncertain: string | null;
   readonly cautions: readonly string[];
 }
 

@@ -13,5 +13,6 @@ export {
 export { changedInputs, fingerprintOf, type Imprint, type ImprintedElements, revisionOf } from './imprint';
 export { type PacketSheet, SHEET_NAMES, type SheetName, type TextSheet } from './sheet';
 export { type FinderOrder, packetSheets } from './packet';
+export { renderSheetSvg } from './sheetSvg';
 export { drawPacket, type PacketTitle } from './drawPacket';
 export { FAINTEST_ON_MAP } from './skyMap';

@@ -12,6 +12,9 @@ import { lineWidthMm } from './lettering';
 import { type FinderOrder, packetSheets } from './packet';
 import { type Ink, type PacketSheet, type Part, SHEET_NAMES, type SheetName } from './sheet';
 
+// Whole packets are drawn here, on whatever else the machine is doing.
+jest.setTimeout(60_000);
+
 const degree = Math.PI / 180;
 const folder = mkdtempSync(join(tmpdir(), 'duskwright-print-'));
 const title = { title: 'Winter lights, packet', subject: 'Sheets of one evening', computedMs: COMPUTED_MS };
@@ -167,8 +170,9 @@ describe.each(['a4', 'letter'] as const)('a packet on %s', (paper) => {
 
   it('says for helpers what the club knows of the site', () => {
     const site = pages[sheets.findIndex(({ name }) => name === 'site')]!;
-    for (const words of ['timber yard', 'open ditch', 'Call 112', 'Shuts 00:30'])
+    for (const words of ['timber yard', 'open ditch', 'Call 112', 'Shuts 00:30']) {
       expect(site).toContain(words);
+    }
   });
 
   it('gives the same bytes when printed again', async () => {

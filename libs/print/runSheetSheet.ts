@@ -1,6 +1,6 @@
 import { clockWords } from '#nights';
 import { type Box, Composer, lineAt, rule, SMALL, type TextStyle } from './composer';
-import { type PacketContent } from './content';
+import { type PacketContent, type PacketTarget } from './content';
 import { spokenFacts } from './facts';
 import { lineWidthMm } from './lettering';
 import { type RunSheet } from './runSheet';
@@ -51,7 +51,7 @@ function runSheetAt(content: PacketContent, footLines: number, sizePt: number): 
         target.name,
         slot.station,
         standingWords(target.standing),
-        [target.gloss, spokenFacts(target)].filter((part) => part !== '').join(' '),
+        [target.gloss, spokenFacts(target), caveat(target)].filter((part) => part !== '').join(' '),
       ];
     });
     page.table(
@@ -98,6 +98,11 @@ function runSheetAt(content: PacketContent, footLines: number, sizePt: number): 
     );
   }
   return page.sheets();
+}
+
+/** What may turn out otherwise because nobody knows a small body's brightness well. */
+function caveat({ uncertain }: PacketTarget): string {
+  return uncertain === null || uncertain.startsWith('the same') ? '' : `Brightness uncertain: ${uncertain}.`;
 }
 
 /** Time from left to right, one lane a station, a box a look. */

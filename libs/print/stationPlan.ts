@@ -16,7 +16,7 @@ const SHOWN = 1e6;
 /** Goodness that a look at the far end of a showing has beside one at its best. */
 const WORST_GOODNESS = 0.3;
 /** Steps of the search for a better order, in looks tried; bounds the time a long programme takes. */
-const MOST_LOOKS_TRIED = 5_000_000;
+const MOST_LOOKS_TRIED = 3_000_000;
 
 /** One station's queue: which of its targets it shows, in which order, from when to when. */
 export function planStation(

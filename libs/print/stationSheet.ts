@@ -45,7 +45,10 @@ export function stationSheet(content: PacketContent, station: PacketStation, foo
     const facts = factLine(target);
     if (facts !== '') page.paragraph(facts);
     const shown = target.intervals.map((part) => hoursWords(part, event.zone)).join(' and ');
-    page.paragraph(`It can be shown from ${shown}.`, { ...BODY, sizePt: 9 });
+    page.paragraph(
+      `It can be shown from ${shown}${target.uncertain === null ? '' : `; ${target.uncertain}`}.`,
+      { ...BODY, sizePt: 9 },
+    );
     const set = imprint.elementSets.find((one) => one.target === target.name);
     if (set !== undefined) {
       page.paragraph(`Its place is from ${elementWords(set, event.startMs)}.`, { ...BODY, sizePt: 9 });

@@ -1,4 +1,5 @@
 import { benchChart } from './chart';
+import { benchElementsRead } from './elementsRead';
 import { type Measurement } from './measurement';
 import { benchPacket } from './packet';
 import { benchSeason } from './season';
@@ -15,6 +16,7 @@ const benches: readonly {
   { names: ['season-search', 'season-altitudes', 'season-memory'], run: benchSeason },
   { names: ['track-fixed-bodies'], run: benchFixedTracks },
   { names: ['track-perturbed'], run: benchPerturbedTracks },
+  { names: ['elements-read'], run: benchElementsRead },
   { names: ['sky-cold'], run: benchSkyCold },
   { names: ['chart-warm'], run: benchChart },
   { names: ['packet', 'packet-memory'], run: benchPacket },

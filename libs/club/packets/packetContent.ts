@@ -29,7 +29,6 @@ export function packetContent(facts: PacketFacts, wishes: PacketWishes, computed
   const observer = observerAt(facts);
   const startMs = Date.parse(event.startsAt);
   const endMs = Date.parse(event.endsAt);
-  const showings = plannedShowings(event);
   const runSheet = runSheetOf(facts, wishes);
   const stations = stationsOf(facts);
   const order = [
@@ -80,12 +79,7 @@ export function packetContent(facts: PacketFacts, wishes: PacketWishes, computed
     stations,
     targets: order.map((name) => targetOf(facts, runSheet, name, observer, instant(light.sunset))),
     runSheet,
-    notShown: event.evening.showings
-      .filter(({ target }) => !showings.some((shown) => shown.target === target))
-      .map(({ target, shown, why }) => ({
-        target,
-        why: shown ? `${why} That is outside the hours of this event.` : why,
-      })),
+    notShown: notShown(facts),
     sky: skyAbove(
       observer,
       wholeMinute((startMs + endMs) / 2),
@@ -150,6 +144,19 @@ export function runSheetOf(facts: PacketFacts, wishes: PacketWishes): RunSheet {
   );
 }
 
+/** What the evening promised and the event does not show, each with its reason. */
+function notShown({ event, items }: PacketFacts): PacketContent['notShown'] {
+  const planned = plannedShowings(event);
+  return event.evening.showings.flatMap(({ target, shown, why }) => {
+    // Renamed or dropped since the evening was judged.
+    if (!items.some(({ item }) => item.target === target)) {
+      return [{ target, why: 'It is no longer on the programme under this name.' }];
+    }
+    if (planned.some((showing) => showing.target === target)) return [];
+    return [{ target, why: shown ? `${why} That is outside the hours of this event.` : why }];
+  });
+}
+
 /** The instruments that have something to show, in the order of the programme. */
 function stationsOf({ instruments, items, event }: PacketFacts): PacketStation[] {
   const shown = plannedShowings(event).map(({ target }) => target);
@@ -195,6 +202,7 @@ function targetOf(
     standing,
     atMiddle: { utcMs: middleMs, ...horizontal(named.sky, middleMs, observer) },
     facts: targetFacts(named, utcMs, observer),
+    uncertain: showing.range?.words ?? null,
     cautions: sunCautions(named.sky, utcMs, observer, sunsetMs, event.zone),
   };
 }
@@ -209,7 +217,8 @@ function otherNameOf(view: PacketFacts['items'][number]['view'], names: readonly
   return /\d/.test(view.name) ? (names.find((name) => !/\d/.test(name)) ?? null) : null;
 }
 
-function sunCautions(
+/** What to mind with a target that stands near the Sun in the sky; common practice. */
+export function sunCautions(
   target: SkyTarget,
   utcMs: number,
   observer: Observer,

@@ -1,5 +1,12 @@
 import { ChartProblem, type ChartScale } from '#charts';
-import { drawPacket, type FinderOrder, type PacketContent, packetSheets } from '#print';
+import {
+  drawPacket,
+  type FinderOrder,
+  type PacketContent,
+  packetSheets,
+  renderSheetSvg,
+  type SheetName,
+} from '#print';
 import { chartScene } from '../charts/chartFor';
 import { ClubProblem } from '../clubProblem';
 import { observerAt, packetContent } from './packetContent';
@@ -32,6 +39,28 @@ export async function drawPacketPdf(
     },
   );
   return { body, sheets: count };
+}
+
+/** A sheet of a packet as it shows on screen. */
+export interface PreviewSheet {
+  readonly name: SheetName;
+  readonly title: string;
+  readonly svg: string;
+}
+
+/** The same sheets as SVG, the same in geometry as the PDF. */
+export function drawPacketSvg(
+  { facts, wishes, computedMs }: PacketTask,
+  onSheet: (done: number, count: number) => void = () => undefined,
+): PreviewSheet[] {
+  const content = packetContent(facts, wishes, computedMs);
+  const { count, sheets } = packetSheets(content, wishes.sheets, finderOrders(content, facts, wishes));
+  const drawn: PreviewSheet[] = [];
+  for (const sheet of sheets) {
+    drawn.push({ name: sheet.name, title: sheet.title, svg: renderSheetSvg(sheet) });
+    onSheet(drawn.length, count);
+  }
+  return drawn;
 }
 
 const SCALE_WORDS: Readonly<Record<ChartScale, string>> = {

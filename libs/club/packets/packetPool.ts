@@ -2,7 +2,7 @@ import { join } from 'node:path';
 import { MessageChannel } from 'node:worker_threads';
 import Piscina from 'piscina';
 import { projectRoot } from '../projectRoot';
-import { type PacketTask } from './packetDrawing';
+import { type PacketTask, type PreviewSheet } from './packetDrawing';
 import { type WorkerTask } from './packetWorker';
 
 let pool: Piscina | null = null;
@@ -14,14 +14,28 @@ export interface PacketWatch {
   readonly signal?: AbortSignal;
 }
 
-/**
- * Draws a packet in a worker thread, off the thread that answers requests: one packet at a time, since each
- * keeps a core busy. Workers run compiled code, so a build must stand in dist/.
- */
+/** Draws a packet as PDF in a worker thread, off the thread that answers requests. */
 export async function drawInWorker(
   task: PacketTask,
-  { onProgress, signal }: PacketWatch = {},
+  watch: PacketWatch = {},
 ): Promise<{ readonly body: Buffer; readonly sheets: number }> {
+  const { body, sheets } = await inWorker<{ body: Uint8Array; sheets: number }>('draw', task, watch);
+  return { body: Buffer.from(body.buffer, body.byteOffset, body.byteLength), sheets };
+}
+
+/** Draws a packet for the screen in a worker thread. */
+export function previewInWorker(task: PacketTask, watch: PacketWatch = {}): Promise<PreviewSheet[]> {
+  return inWorker('preview', task, watch);
+}
+
+/**
+ * One packet at a time, since each keeps a core busy. Workers run compiled code, so a build must stand in dist/.
+ */
+async function inWorker<Result>(
+  name: 'draw' | 'preview',
+  task: PacketTask,
+  { onProgress, signal }: PacketWatch,
+): Promise<Result> {
   pool ??= new Piscina({
     filename: join(projectRoot, 'dist', 'libs', 'club', 'packets', 'packetWorker.js'),
     maxThreads: 1,
@@ -39,12 +53,11 @@ export async function drawInWorker(
   }
   try {
     const worker: WorkerTask = { ...task, progress: port2 };
-    const { body, sheets } = (await pool.run(worker, {
-      name: 'draw',
+    return (await pool.run(worker, {
+      name,
       transferList: [port2],
       ...(signal && { signal }),
-    })) as { body: Uint8Array; sheets: number };
-    return { body: Buffer.from(body.buffer, body.byteOffset, body.byteLength), sheets };
+    })) as Result;
   } finally {
     port1.close();
   }

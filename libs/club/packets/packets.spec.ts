@@ -9,7 +9,10 @@ import { updateClub } from '../settings/club';
 import { nightSite } from '../sites/nightSite';
 import { getSite, updateSite } from '../sites/sites';
 import { addElementSet, updateTarget } from '../targets/targets';
-import { closePacketPool, listPackets, type PacketInput, printPacket } from './index';
+import { closePacketPool, listPackets, type PacketInput, previewPacket, printPacket } from './index';
+
+// Whole packets are drawn here, on whatever else the machine is doing.
+jest.setTimeout(60_000);
 
 const DATE = '2027-02-13';
 let club: TestClub;
@@ -144,6 +147,26 @@ it.each([
   });
   expect(await wholeDatabase(club.database)).toBe(before);
   expect(await club.database.client.packetPrinting.count()).toBe(printings);
+});
+
+it('shows the same sheets on screen, and keeps nothing of it', async () => {
+  const before = await wholeDatabase(club.database);
+  const shown = await previewPacket(club.database, { eventId: event.id, sheets: ['runSheet', 'finder'] });
+  const printed = await print({ sheets: ['runSheet', 'finder'] });
+  expect(shown).toHaveLength(printed.sheets);
+  expect(shown.map(({ name }) => name).slice(0, 2)).toEqual(['runSheet', 'finder']);
+  for (const { svg } of shown) {
+    expect(svg).toMatch(/^<svg /);
+    expect(svg).toContain(printed.revision);
+  }
+  expect(await wholeDatabase(club.database)).toBe(before);
+});
+
+it('names a promised target that has been renamed since, rather than losing it', async () => {
+  await updateTarget(club.database, 'Jupiter', { name: 'The great planet' });
+  const { body } = await print({ sheets: ['runSheet'] });
+  await updateTarget(club.database, 'The great planet', { name: 'Jupiter' });
+  expect(textOf(body)).toContain('Jupiter: It is no longer on the programme under this name.');
 });
 
 it('stops when told to', async () => {

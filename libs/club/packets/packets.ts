@@ -5,7 +5,8 @@ import { checked } from '../input/checked';
 import { imprintAsText, imprintFromText } from './keptPacket';
 import { packetFacts } from './packetFacts';
 import { PacketInput } from './packetInput';
-import { drawInWorker, type PacketWatch } from './packetPool';
+import { type PacketTask, type PreviewSheet } from './packetDrawing';
+import { drawInWorker, type PacketWatch, previewInWorker } from './packetPool';
 
 /** A packet as it is sent or saved. */
 export interface PrintedPacket {
@@ -25,21 +26,15 @@ export async function printPacket(
   input: PacketInput,
   watch: PacketWatch = {},
 ): Promise<PrintedPacket> {
-  const wishes = checked(PacketInput, input);
-  const { leastLookMinutes, breaks } = wishes;
-  const facts = await packetFacts(database, wishes.eventId, { leastLookMinutes, breaks });
+  const { facts, wishes, computedMs } = await packetTask(database, input);
   const { imprint, event } = facts;
   const revision = revisionOf(imprint);
-  const earlier = await database.client.packet.findUnique({
-    where: { eventId_revision: { eventId: event.id, revision } },
-  });
-  const computedAt = earlier?.computedAt ?? database.now();
-  const { body, sheets } = await drawInWorker({ facts, wishes, computedMs: computedAt.getTime() }, watch);
+  const { body, sheets } = await drawInWorker({ facts, wishes, computedMs }, watch);
   await database.client.$transaction(async (tx) => {
     const key = { eventId: event.id, revision };
     const packet = await tx.packet.upsert({
       where: { eventId_revision: key },
-      create: { ...key, imprintText: imprintAsText(imprint), computedAt },
+      create: { ...key, imprintText: imprintAsText(imprint), computedAt: new Date(computedMs) },
       update: {},
     });
     const number = (await tx.packetPrinting.count({ where: { packetId: packet.id } })) + 1;
@@ -60,6 +55,25 @@ export async function printPacket(
     revision,
     sheets,
   };
+}
+
+/** The same sheets for the screen, as SVG; nothing is kept. */
+export async function previewPacket(
+  database: Database,
+  input: PacketInput,
+  watch: PacketWatch = {},
+): Promise<readonly PreviewSheet[]> {
+  return previewInWorker(await packetTask(database, input), watch);
+}
+
+/** A packet's facts and wishes; it counts as computed when these facts were first printed, or now. */
+async function packetTask(database: Database, input: PacketInput): Promise<PacketTask> {
+  const wishes = checked(PacketInput, input);
+  const { leastLookMinutes, breaks } = wishes;
+  const facts = await packetFacts(database, wishes.eventId, { leastLookMinutes, breaks });
+  const key = { eventId: facts.event.id, revision: revisionOf(facts.imprint) };
+  const earlier = await database.client.packet.findUnique({ where: { eventId_revision: key } });
+  return { facts, wishes, computedMs: (earlier?.computedAt ?? database.now()).getTime() };
 }
 
 /** What was printed for an event, and whether it still holds. */
