@@ -74,7 +74,10 @@ const sameStarRad = 20 / 206265;
 /** The index of the drawn star that stands at a place, or -1. */
 export function starAt(drawn: readonly DrawnStar[], place: SkyPoint): number {
   return drawn.findIndex(({ star }) => {
+    // Nearly every star is far away; its declination alone tells that.
+    const along = star.decRad - place.decRad;
+    if (along > sameStarRad || along < -sameStarRad) return false;
     const across = 2 * Math.sin((star.raRad - place.raRad) / 2) * Math.cos(place.decRad);
-    return Math.hypot(across, star.decRad - place.decRad) < sameStarRad;
+    return Math.hypot(across, along) < sameStarRad;
   });
 }

@@ -6,6 +6,7 @@ const degree = Math.PI / 180;
 /** Stars as unit vectors, in order of declination, so that those near a place are found without a look at all. */
 export interface StarField {
   readonly stars: readonly Star[];
+  readonly decs: Float64Array;
   readonly vectors: Float64Array;
 }
 
@@ -21,11 +22,16 @@ export interface Landmark {
 /** Lays stars out for `visitNear`. */
 export function starField(stars: readonly Star[]): StarField {
   const sorted = [...stars].sort((one, other) => one.decRad - other.decRad);
+  const decs = Float64Array.from(sorted, ({ decRad }) => decRad);
   const vectors = new Float64Array(3 * sorted.length);
-  sorted.forEach(({ raRad, decRad }, index) => {
-    vectors.set(vectorOf({ raRad, decRad }), 3 * index);
-  });
-  return { stars: sorted, vectors };
+  for (let i = 0; i < sorted.length; i++) {
+    const { raRad, decRad } = sorted[i]!;
+    const across = Math.cos(decRad);
+    vectors[3 * i] = across * Math.cos(raRad);
+    vectors[3 * i + 1] = across * Math.sin(raRad);
+    vectors[3 * i + 2] = Math.sin(decRad);
+  }
+  return { stars: sorted, decs, vectors };
 }
 
 /** Calls `visit` with the index and separation (radians) of each star within a radius of a place. */
@@ -35,15 +41,18 @@ export function visitNear(
   radiusRad: number,
   visit: (index: number, separationRad: number) => void,
 ): void {
-  const { stars, vectors } = field;
+  const { decs, vectors } = field;
   const [x, y, z] = vectorOf(place);
   // The chord, unlike the cosine, stays exact for stars close together.
-  const longest = (2 * Math.sin(radiusRad / 2)) ** 2;
+  const chord = 2 * Math.sin(radiusRad / 2);
+  const longest = chord * chord;
   const top = place.decRad + radiusRad;
-  for (let i = firstFrom(stars, place.decRad - radiusRad); i < stars.length; i++) {
-    if (stars[i]!.decRad > top) break;
-    const square =
-      (vectors[3 * i]! - x) ** 2 + (vectors[3 * i + 1]! - y) ** 2 + (vectors[3 * i + 2]! - z) ** 2;
+  const count = decs.length;
+  for (let i = firstFrom(decs, place.decRad - radiusRad); i < count && decs[i]! <= top; i++) {
+    const dx = vectors[3 * i]! - x;
+    const dy = vectors[3 * i + 1]! - y;
+    const dz = vectors[3 * i + 2]! - z;
+    const square = dx * dx + dy * dy + dz * dz;
     if (square <= longest) visit(i, 2 * Math.asin(Math.min(1, Math.sqrt(square) / 2)));
   }
 }
@@ -75,12 +84,12 @@ export function landmarkOf(field: StarField, index: number): Landmark {
   return { star, partner, rivals };
 }
 
-function firstFrom(stars: readonly Star[], decRad: number): number {
+function firstFrom(decs: Float64Array, decRad: number): number {
   let low = 0;
-  let high = stars.length;
+  let high = decs.length;
   while (low < high) {
     const middle = (low + high) >> 1;
-    if (stars[middle]!.decRad < decRad) low = middle + 1;
+    if (decs[middle]! < decRad) low = middle + 1;
     else high = middle;
   }
   return low;

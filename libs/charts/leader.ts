@@ -21,10 +21,16 @@ export function leaderTo([left, top, right, bottom]: Box, owner: Disc): Line | n
 
 /** True where a leader passes over no other disc. */
 export function isLeaderFree(leader: Line, owner: Disc, discs: readonly Disc[]): boolean {
-  return discs.every(
-    (disc) =>
-      disc === owner || distanceToLine([disc.xMm, disc.yMm], leader[0], leader[1]) > disc.radiusMm + dotGapMm,
-  );
+  const [[x0, y0], [x1, y1]] = leader;
+  const [left, right] = x0 < x1 ? [x0, x1] : [x1, x0];
+  const [top, bottom] = y0 < y1 ? [y0, y1] : [y1, y0];
+  return discs.every((disc) => {
+    const reach = disc.radiusMm + dotGapMm;
+    // Nearly every disc is far away; comparing edges first spares it the distance.
+    if (disc.xMm < left - reach || disc.xMm > right + reach) return true;
+    if (disc.yMm < top - reach || disc.yMm > bottom + reach) return true;
+    return disc === owner || distanceToLine([disc.xMm, disc.yMm], leader[0], leader[1]) > reach;
+  });
 }
 
 /** The leaders of the labels that have one. */

@@ -61,6 +61,18 @@ function spanInside(
   [left, top, right, bottom]: Box,
   gapMm: number,
 ): [number, number] | null {
+  if (
+    (from[0] < left - gapMm && to[0] < left - gapMm) ||
+    (from[0] > right + gapMm && to[0] > right + gapMm)
+  ) {
+    return null;
+  }
+  if (
+    (from[1] < top - gapMm && to[1] < top - gapMm) ||
+    (from[1] > bottom + gapMm && to[1] > bottom + gapMm)
+  ) {
+    return null;
+  }
   let enter = 0;
   let leave = 1;
   for (const [start, step, low, high] of [

@@ -25,7 +25,7 @@ export function placePath(
   of: string,
   covers: readonly Disc[] = [],
 ): PlacedPath {
-  // Where a disc stands no tick's time is written.
+  // Where a disc stands neither a tick nor its time can be read.
   const isCovered = ([x, y]: SheetPoint): boolean =>
     covers.some(({ xMm, yMm, radiusMm }) => Math.hypot(x - xMm, y - yMm) < radiusMm + 0.6);
   const placed = path.map((point) => ({ at: point.at, point: plate.toSheet(point) }));
@@ -46,7 +46,7 @@ export function placePath(
     stroke: line,
   }));
   placed.forEach(({ at, point }, index) => {
-    if (point === null || at === '') return;
+    if (point === null || at === '' || isCovered(point)) return;
     const before = placed[index - 1]?.point ?? point;
     const after = placed[index + 1]?.point ?? point;
     const length = Math.hypot(after[0] - before[0], after[1] - before[1]);

@@ -34,8 +34,8 @@ export interface WayWish {
 
 /** What is this bright needs no directions: one sees it and points. Our choice. */
 const plainMagnitude = 2.5;
-/** Beginnings are looked for this far from the target. */
-const reachRad = 30 * degree;
+/** Beginnings are looked for this far from the target: first near, where nearly all are found. */
+const reachesRad = [14 * degree, 30 * degree];
 /** The faintest star that a hop may land on: what any finder shows on a hazy night (common practice). */
 const faintestLanding = 7;
 /** Rivals are counted a little fainter than that. */
@@ -56,23 +56,38 @@ const mostHops = 6;
 export function wayTo(stars: StarCatalogue, wish: WayWish): Way {
   const { target } = wish;
   if (target.magnitude !== null && target.magnitude <= plainMagnitude) return { kind: 'plain' };
-  const field = starField(
-    starsInCone(stars, {
-      raRad: target.raRad,
-      decRad: target.decRad,
-      // So much wider that no star within reach lacks its rivals.
-      radiusRad: reachRad + surroundingsRad,
-      faintestMagnitude: faintestSeen,
-    }),
-  );
-  const found = search(field, wish);
-  if (found === null) return { kind: 'none' };
-  const hops = found.map(({ node, lengthRad }, index): Hop => ({
-    from: node,
-    to: found[index + 1]?.node ?? null,
-    lengthRad,
-  }));
-  return { kind: 'hops', hops };
+  for (const reachRad of reachesRad) {
+    const field = starField(
+      starsInCone(stars, {
+        raRad: target.raRad,
+        decRad: target.decRad,
+        // So much wider that no star within reach lacks its rivals.
+        radiusRad: reachRad + surroundingsRad,
+        faintestMagnitude: faintestSeen,
+      }),
+    );
+    const found = search(field, wish, reachRad);
+    // Nothing that goes farther out could be cheaper than this.
+    const isBest = found !== null && found.cost <= leastCostBeyond(reachRad, wish.finderFieldRad);
+    if (found !== null && (isBest || reachRad === reachesRad.at(-1))) {
+      return { kind: 'hops', hops: hopsOf(found.start) };
+    }
+  }
+  return { kind: 'none' };
+}
+
+function hopsOf(start: Node): Hop[] {
+  const hops: Hop[] = [];
+  for (let node: Node | null = start; node !== null; node = node.next) {
+    hops.push({ from: node.landmark, to: node.next?.landmark ?? null, lengthRad: node.lengthRad });
+  }
+  return hops;
+}
+
+/** The least that a way which anywhere is farther than `reachRad` from the target can cost. */
+function leastCostBeyond(reachRad: number, fieldRad: number): number {
+  const hops = Math.ceil(reachRad / fieldRad);
+  return hops * hopCost(reachRad / hops, fieldRad, false);
 }
 
 interface Node {
@@ -86,13 +101,15 @@ interface Node {
   settled: boolean;
 }
 
-function search(
-  field: StarField,
-  wish: WayWish,
-): { readonly node: Landmark; readonly lengthRad: number }[] | null {
+interface Found {
+  readonly start: Node;
+  readonly cost: number;
+}
+
+function search(field: StarField, wish: WayWish, reachRad: number): Found | null {
   const nodes = new Map<number, Node | null>();
   const frontier: Node[] = [];
-  let best: { readonly start: Node; readonly cost: number } | null = null;
+  let best: Found | null = null;
 
   const reach = (from: SkyPoint, next: Node | null, costThere: number, hops: number): void => {
     if (hops > mostHops) return;
@@ -102,7 +119,7 @@ function search(
       const cost = costThere + hopCost(lengthRad, wish.finderFieldRad, next === null);
       let node = nodes.get(index);
       if (node === undefined) {
-        node = nodeAt(field, index, wish);
+        node = nodeAt(field, index, wish, reachRad);
         nodes.set(index, node);
         if (node !== null) frontier.push(node);
       }
@@ -123,17 +140,12 @@ function search(
     if (total < Math.min(best?.cost ?? Infinity, dearest)) best = { start: node, cost: total };
     reach(node.landmark.star, node, node.cost + landingCost(node.landmark), node.hops + 1);
   }
-  if (best === null) return null;
-  const way: { node: Landmark; lengthRad: number }[] = [];
-  for (let node: Node | null = best.start; node !== null; node = node.next) {
-    way.push({ node: node.landmark, lengthRad: node.lengthRad });
-  }
-  return way;
+  return best;
 }
 
 const leastHopRad = 0.25 * degree;
 
-function nodeAt(field: StarField, index: number, wish: WayWish): Node | null {
+function nodeAt(field: StarField, index: number, wish: WayWish, reachRad: number): Node | null {
   const star = field.stars[index]!;
   if (star.magnitude > faintestLanding || wish.isHidden(star)) return null;
   if (separationOf(star, wish.target) > reachRad) return null;

@@ -14,7 +14,7 @@ import {
 import { type Observer, type Place, place, positionAngle, type SkyTarget, toDeg } from '#sky';
 import { DateTime } from 'luxon';
 import { problem } from '../clubProblem';
-import { type NamedTarget } from '../sky/namedTarget';
+import { movedTarget, type NamedTarget } from '../sky/namedTarget';
 import { chartInset } from './chartInset';
 import { chartPath, pathPoint } from './chartPath';
 import { chartWords } from './chartWords';
@@ -62,7 +62,8 @@ const SUN_CLEARANCE_DEG = 15;
  * The scene of a chart. Throws a ClubProblem where the target is the Sun or stands within 15 degrees of a Sun
  * that is up, and a ChartProblem where scale, field or paper is none.
  */
-export function chartScene(order: ChartOrder): Scene {
+export function chartScene(given: ChartOrder): Scene {
+  const order = { ...given, target: movedTarget(given.target, given.utcMs) };
   const seen = place(order.target.sky, order.utcMs, order.observer);
   refuseNearSun(order, seen);
   refuseBelowHorizon(order, seen);

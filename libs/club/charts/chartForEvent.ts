@@ -7,7 +7,7 @@ import { type EventView } from '../events/eventView';
 import { programVersion } from '../programVersion';
 import { problem } from '../clubProblem';
 import { getSite } from '../sites/sites';
-import { type ElementsOrigin, type NamedTarget } from '../sky/namedTarget';
+import { type ElementsOrigin, movedTarget, type NamedTarget } from '../sky/namedTarget';
 import { ttIsoToJd } from '../targets/elementSetInput';
 import { getSkyTarget, getTarget } from '../targets/targets';
 import { type TargetView } from '../targets/targetView';
@@ -42,8 +42,9 @@ export async function chartForEvent(database: Database, request: EventChartReque
     );
   }
   const site = await getSite(database, event.site.id);
+  const utcMs = showing.best?.utcMs ?? middleOf(event);
   const order: ChartOrder = {
-    target: await clubTarget(database, request.target),
+    target: await clubTarget(database, request.target, utcMs),
     observer: {
       latitudeRad: toRad(site.latitudeDeg),
       longitudeRad: toRad(site.longitudeDeg),
@@ -51,7 +52,7 @@ export async function chartForEvent(database: Database, request: EventChartReque
     },
     zone: event.zone,
     siteName: site.name,
-    utcMs: showing.best?.utcMs ?? middleOf(event),
+    utcMs,
     scale: request.scale,
     fieldDeg: request.fieldDeg ?? null,
     orientation: request.orientation ?? 'upright',
@@ -65,12 +66,13 @@ export async function chartForEvent(database: Database, request: EventChartReque
   return drawChart(chartScene(order), order, request.format);
 }
 
-/** A target of the club with all that is known of it. */
-export async function clubTarget(database: Database, name: string): Promise<NamedTarget> {
+/** A target of the club with all that is known of it, its motion followed to around a UTC instant. */
+export async function clubTarget(database: Database, name: string, utcMs: number): Promise<NamedTarget> {
   const view = await getTarget(database, name);
   const sky = await getSkyTarget(database, name);
   const deepSky = view.kind === 'deepSky' ? findDeepSky(view.catalogueId) : null;
-  return { sky, kind: kindOf(view, deepSky?.kind ?? 'asterism'), deepSky, origin: originOf(view) };
+  const target = { sky, kind: kindOf(view, deepSky?.kind ?? 'asterism'), deepSky, origin: originOf(view) };
+  return movedTarget(target, utcMs);
 }
 
 function kindOf(view: TargetView, deepSkyKind: NamedTarget['kind']): NamedTarget['kind'] {

@@ -56,7 +56,7 @@ export async function packetFacts(
     items.push({
       item,
       view: await getTarget(database, item.targetId),
-      named: await clubTarget(database, item.targetId),
+      named: await clubTarget(database, item.targetId, Date.parse(event.startsAt)),
     });
   }
   const instruments = (await listInstruments(database)).filter(({ id }) =>

@@ -1,6 +1,14 @@
 import { type DeepSkyKind, type DeepSkyObject, findDeepSky } from '#catalogue';
 import { type ElementSet, findBody } from '#elements';
-import { type FixedTarget, type OrbitTarget, SOLAR_BODIES, type SkyTarget, toRad } from '#sky';
+import {
+  type FixedTarget,
+  MS_PER_DAY,
+  type OrbitTarget,
+  SOLAR_BODIES,
+  type SkyTarget,
+  toRad,
+  withPerturbations,
+} from '#sky';
 import { problem } from '../clubProblem';
 
 /** A target as it was named, with all that is known of it. */
@@ -80,4 +88,15 @@ export function orbitTarget(set: ElementSet, comaArcmin: number | null = null): 
     brightness: set.brightness,
     comaArcmin: comaArcmin ?? (set.kind === 'comet' ? USUAL_COMA_ARCMIN : 0),
   };
+}
+
+/** How far round an instant a moving target's chart looks, days; withPerturbations adds twenty on either side. */
+const AROUND_MS = 5 * MS_PER_DAY;
+
+/** A comet or asteroid with its motion under the planets around a UTC instant; any other target as it is. */
+export function movedTarget(target: NamedTarget, utcMs: number): NamedTarget {
+  const { sky } = target;
+  return sky.kind !== 'orbit' || sky.motion !== undefined
+    ? target
+    : { ...target, sky: withPerturbations(sky, utcMs - AROUND_MS, utcMs + AROUND_MS) };
 }
