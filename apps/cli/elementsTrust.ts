@@ -39,7 +39,7 @@ export function addElementsTrust(elements: Command): void {
         return bodyTrust(trusted, Date.parse(evening) + DAY_MS, fields, perturbed);
       });
       if (json === true) printJson({ date: evening, bodies });
-      else for (const { words } of bodies) print(words);
+      else for (const { words, motion } of bodies) print(`${words} ${motion.words}`);
     });
 }
 

@@ -51,7 +51,8 @@ export async function compile() {
   // Paths of the compiled files hang on the compiler's options: other options, everything anew.
   const stamp = join(dist, '.options');
   const wanted = fingerprint([join(root, '.swcrc'), join(root, 'package-lock.json')]);
-  if (!existsSync(stamp) || readFileSync(stamp, 'utf8') !== wanted) rmSync(dist, { recursive: true, force: true });
+  if (!existsSync(stamp) || readFileSync(stamp, 'utf8') !== wanted)
+    rmSync(dist, { recursive: true, force: true });
 
   const kept = new Set([stamp]);
   let compiled = 0;

@@ -36,7 +36,11 @@ await prepare();
 ensurePrograms();
 const jest = spawnSync(
   process.execPath,
-  ['--disable-warning=ExperimentalWarning', join(root, 'node_modules', 'jest', 'bin', 'jest.js'), ...process.argv.slice(2)],
+  [
+    '--disable-warning=ExperimentalWarning',
+    join(root, 'node_modules', 'jest', 'bin', 'jest.js'),
+    ...process.argv.slice(2),
+  ],
   { cwd: root, stdio: 'inherit' },
 );
 process.exit(jest.status ?? 1);

@@ -50,7 +50,19 @@ export function showingRange(
   const lost = expected.shown && fainter.totalMs === 0;
   const glow = lost ? glowAt(bench, season, site, hours, index, by, expected.best.utcMs) : null;
   const cases = { ifBrighter: showingCase(brighter), ifFainter: showingCase(fainter) };
-  return { magnitudes: by, ...cases, words: rangeWords(item, showingCase(expected), cases, law, glow, site) };
+  const amount = law.kind === 'comet' ? 'a magnitude' : `${String(by)} magnitudes`;
+  const told = changesWords(item, showingCase(expected), cases, glow, site.site.zone).map(
+    ({ what, runs }) => `${what} if it runs ${amount} ${runs}`,
+  );
+  const same = expected.shown
+    ? `the same if it runs ${amount} bright or faint`
+    : `the same even if it runs ${amount} bright`;
+  return {
+    magnitudes: by,
+    ...cases,
+    matters: told.length > 0,
+    words: told.length > 0 ? told.join('; ') : same,
+  };
 }
 
 function lawOf(target: SkyTarget): Brightness | null {
@@ -83,30 +95,23 @@ function glowAt(
   return moonIsUp ? 'twilight and the moonlight' : 'twilight';
 }
 
-/** What the two cases change, in words that follow the showing's own times. */
-function rangeWords(
+/** What each of the two cases changes, in words that follow the showing's own times; nothing where neither does. */
+function changesWords(
   item: ProgrammeItem,
   expected: ShowingCase,
   { ifBrighter, ifFainter }: Pick<ShowingRange, 'ifBrighter' | 'ifFainter'>,
-  law: Brightness,
   glow: Glow,
-  { site: { zone } }: PreparedSite,
-): string {
-  const amount = law.kind === 'comet' ? 'a magnitude' : `${String(RANGE.asteroid)} magnitudes`;
+  zone: string,
+): readonly { readonly what: string; readonly runs: 'faint' | 'bright' }[] {
   if (!expected.shown) {
-    return ifBrighter.shown
-      ? `${stretchWords(ifBrighter.intervals, zone)} if it runs ${amount} bright`
-      : `the same even if it runs ${amount} bright`;
+    return ifBrighter.shown ? [{ what: stretchWords(ifBrighter.intervals, zone), runs: 'bright' }] : [];
   }
   const faint = faintWords(item, expected, ifFainter, glow, zone);
-  const bright = sameStretches(expected.intervals, ifBrighter.intervals)
-    ? null
-    : changedWords(expected.intervals, ifBrighter.intervals, zone);
-  const parts = [
-    ...(faint === null ? [] : [`${faint} if it runs ${amount} faint`]),
-    ...(bright === null ? [] : [`${bright} if it runs ${amount} bright`]),
+  const bright = movedWords(expected.intervals, ifBrighter.intervals, zone);
+  return [
+    ...(faint === null ? [] : [{ what: faint, runs: 'faint' as const }]),
+    ...(bright === null ? [] : [{ what: bright, runs: 'bright' as const }]),
   ];
-  return parts.length === 0 ? `the same if it runs ${amount} bright or faint` : parts.join('; ');
 }
 
 /** What becomes of a showing if the target is fainter; null where nothing does. */
@@ -124,9 +129,7 @@ function faintWords(
     const minutes = Math.round(fainter.minutes);
     return `only ${String(minutes)} of the ${String(item.leastMinutes)} minutes it needs`;
   }
-  return sameStretches(expected.intervals, fainter.intervals)
-    ? null
-    : changedWords(expected.intervals, fainter.intervals, zone);
+  return movedWords(expected.intervals, fainter.intervals, zone);
 }
 
 function sameStretches(a: readonly Interval[], b: readonly Interval[]): boolean {
@@ -139,8 +142,9 @@ function sameStretches(a: readonly Interval[], b: readonly Interval[]): boolean 
   );
 }
 
-/** The new times, cut down to the end that has moved where that is enough. */
-function changedWords(from: readonly Interval[], to: readonly Interval[], zone: string): string {
+/** The new times, cut down to the end that has moved where that is enough; null where neither has. */
+function movedWords(from: readonly Interval[], to: readonly Interval[], zone: string): string | null {
+  if (sameStretches(from, to)) return null;
   const [before] = from;
   const [after] = to;
   if (from.length !== 1 || to.length !== 1 || before === undefined || after === undefined) {

@@ -38,6 +38,8 @@ export interface ShowingRange {
   readonly magnitudes: number;
   readonly ifBrighter: ShowingCase;
   readonly ifFainter: ShowingCase;
+  /** Whether either case changes anything worth telling. */
+  readonly matters: boolean;
   /** What changes, to stand after the showing's own times: 'from 21:40 if it runs a magnitude faint'. */
   readonly words: string;
 }

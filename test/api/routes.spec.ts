@@ -275,6 +275,8 @@ describe('the documentation', () => {
         ),
         'get /api/targets/{target}/element-sets',
         'post /api/targets/{target}/element-sets',
+        'get /api/targets/{target}/changes',
+        'get /api/targets/{target}/trust',
         'post /api/searches',
         'get /api/searches/{id}',
         'delete /api/searches/{id}',
@@ -286,14 +288,17 @@ describe('the documentation', () => {
         'post /api/events/{id}/publish',
         'post /api/events/{id}/call-off',
         'get /api/events/{id}/charts/{target}',
+        'get /api/events/{id}/changes',
+        'get /api/events/{id}/trust',
         'get /calendar.ics',
         'get /sites/{site}/calendar.ics',
       ].sort(),
     );
-    const { SiteBody, TargetBody } = body.components.schemas;
+    const { SiteBody, TargetBody, ElementsBody } = body.components.schemas;
     expect(SiteBody.properties.latitudeDeg).toMatchObject({ type: 'number', minimum: -90, maximum: 90 });
     expect(SiteBody.required).toEqual(['name', 'latitudeDeg', 'longitudeDeg', 'sky']);
     expect(TargetBody.oneOf ?? TargetBody.anyOf).toHaveLength(4);
+    expect(ElementsBody.anyOf).toHaveLength(2);
   });
 
   it('has a page for people that runs its own scripts only', async () => {

@@ -14,9 +14,9 @@ export function bodyNotes({ changes, trust }: EventNotes): Html {
     <h3>Comets and asteroids</h3>
     <ul>
       ${trust.map(
-        ({ line, words }) =>
+        ({ line, words, motion }) =>
           html`<li>
-            ${line}
+            ${line} ${motion.words}
             <details>
               <summary>
                 How that is reckoned<span class="hidden">: ${line.slice(0, line.indexOf(':'))}</span>

@@ -45,13 +45,15 @@ export function showingsTable(
 function showingRow(showing: Showing, zone: string, gloss: string): Html {
   const { target, shown, intervals, best, why, range } = showing;
   if (!shown) {
-    const hope = range?.ifBrighter.shown === true ? ` ${forecastWords(range)}` : '';
+    const hope = range?.matters === true ? ` ${forecastWords(range)}` : '';
     return html`<tr>
       <th scope="row">${target}</th>
       <td colspan="2">${why}${hope}</td>
     </tr>`;
   }
-  const told = [gloss, range === null ? '' : forecastWords(range)].filter((part) => part !== '').join(' ');
+  const told = [asSentence(gloss), range?.matters === true ? forecastWords(range) : '']
+    .filter((part) => part !== '')
+    .join(' ');
   const words =
     told !== '' &&
     html`<tr class="gloss">
@@ -63,6 +65,10 @@ function showingRow(showing: Showing, zone: string, gloss: string): Html {
       <td>${best !== null && `${clockWords(best.utcMs, zone)}, ${directionWords(showing)}`}</td>
     </tr>
     ${words}`;
+}
+
+function asSentence(words: string): string {
+  return words === '' || /[.!?]$/.test(words) ? words : `${words}.`;
 }
 
 /** What another brightness than foretold would change. */

@@ -1,4 +1,11 @@
-import { type BodyChange, type ClubView, dateWords, type EventView, type ProgrammeView, type Ranking } from '#club';
+import {
+  type BodyChange,
+  type ClubView,
+  dateWords,
+  type EventView,
+  type ProgrammeView,
+  type Ranking,
+} from '#club';
 import { type JudgedEvening } from '#nights';
 import { changeNotes } from './bodyNotes';
 import { offerWords, partsList, showingsTable } from './eveningParts';

@@ -38,7 +38,9 @@ export class KeptNotes {
     return this.changes;
   }
 
+  /** Notes on an event; none once it is over. */
   async ofEvent(event: EventView): Promise<EventNotes> {
+    if (Date.parse(event.endsAt) < this.database.now().getTime()) return { changes: [], trust: [] };
     this.refresh();
     let trust = this.trusts.get(event.id);
     if (trust === undefined) {

@@ -2,10 +2,12 @@ import { type ChartScale } from '#charts';
 import { eveningSpan, type Showing, type ShowingRange, zoneClock } from '#nights';
 import { type OrbitTarget } from '#sky';
 import { DateTime } from 'luxon';
+import { setImmediate as othersTurn } from 'node:timers/promises';
 import { problem } from '../clubProblem';
 import { type Prisma } from '../database/generated/client';
 import { type Database } from '../database/openDatabase';
 import { dateWords } from '../events/eveningWords';
+import { eveningFromText } from '../events/keptEvening';
 import { nightProgramme, programmeParts } from '../programmes/programmeView';
 import { nightSite } from '../sites/nightSite';
 import { siteParts, siteView } from '../sites/siteView';
@@ -14,7 +16,7 @@ import { perturbing } from '../sky/perturbing';
 import { type ElementSetView, elementSetView } from '../targets/elementSets';
 import { orbitTargetOf, type TargetRow } from '../targets/targetView';
 import { changeSentence } from './changeWords';
-import { type EveningChange, eveningChange, type ShowingChange } from './eveningChange';
+import { type EveningChange, eveningChange, type PlannedEvening, type ShowingChange } from './eveningChange';
 
 /** One of the two showings of a change. Instants ISO, UTC. */
 export interface ChangedShowing {
@@ -89,14 +91,14 @@ const DAY_MS = 86_400_000;
  * What the second of two element sets of a target changes in the evenings given. Throws a ClubProblem of kind
  * 'invalid' where either set cannot be followed to one of them.
  */
-export function changeNotice(
+export async function changeNotice(
   target: TargetRow,
   before: Prisma.ElementSetModel,
   after: Prisma.ElementSetModel,
   evenings: readonly PlannedRow[],
   locale: string,
-): ChangeNotice {
-  const touched = touchedEvenings(target, before, after, evenings, locale);
+): Promise<ChangeNotice> {
+  const touched = await touchedEvenings(target, before, after, evenings, locale);
   const untouched = evenings.length - touched.length;
   return {
     target: target.name,
@@ -108,20 +110,24 @@ export function changeNotice(
   };
 }
 
-export function touchedEvenings(
+/** The evenings of a notice; after each one, which takes milliseconds, whatever else waits has its turn. */
+export async function touchedEvenings(
   target: TargetRow,
   before: Prisma.ElementSetModel,
   after: Prisma.ElementSetModel,
   evenings: readonly PlannedRow[],
   locale: string,
-): readonly TouchedEvening[] {
+): Promise<readonly TouchedEvening[]> {
   const from = orbitTargetOf(target, before);
   const to = orbitTargetOf(target, after);
   const perturbed = perturbing();
-  return evenings.flatMap((row): TouchedEvening[] => {
+  const touched: TouchedEvening[] = [];
+  for (const row of evenings) {
     const change = changeOf(row, target, from, to, perturbed);
-    return change === null ? [] : [touchedEvening(row, target.name, change, after.receivedAt, locale)];
-  });
+    if (change !== null) touched.push(touchedEvening(row, target.name, change, after.receivedAt, locale));
+    await othersTurn();
+  }
+  return touched;
 }
 
 function changeOf(
@@ -136,11 +142,35 @@ function changeOf(
   if (item === undefined) return null;
   const evening = { site: nightSite(siteView(row.site)), programme, item, date: row.date };
   try {
-    return eveningChange(evening, before, after, perturbed);
+    return eveningChange(inEventHours(evening, row), before, after, perturbed);
   } catch (error) {
     if (!(error instanceof RangeError)) throw error;
     throw problem('invalid', 'epoch', null, error.message);
   }
+}
+
+/** Hours nearer together than this are the same, told to the minute. */
+const SAME_HOURS_MS = 60_000;
+
+/** The evening with the hours of its event, where those were moved since it was judged. */
+function inEventHours(evening: PlannedEvening, { events, judgedText }: PlannedRow): PlannedEvening {
+  const [event] = events;
+  const judged = eveningFromText(judgedText).publicHours;
+  if (event === undefined || judged === null) return evening;
+  const { startsAt, endsAt, zone } = event;
+  const moved =
+    Math.abs(startsAt.getTime() - judged.startMs) > SAME_HOURS_MS ||
+    Math.abs(endsAt.getTime() - judged.endMs) > SAME_HOURS_MS;
+  if (!moved) return evening;
+  const clock = (instant: Date): string => DateTime.fromJSDate(instant, { zone }).toFormat('HH:mm');
+  return {
+    ...evening,
+    site: { ...evening.site, gate: { opens: null, closes: null } },
+    programme: {
+      ...evening.programme,
+      hours: { kind: 'fixed', start: clock(startsAt), end: clock(endsAt) },
+    },
+  };
 }
 
 function touchedEvening(
@@ -185,7 +215,9 @@ function noticeSentence(target: string, touched: readonly TouchedEvening[], unto
   const evenings = (count: number): string => `${String(count)} coming evening${count === 1 ? '' : 's'}`;
   const again = touched.filter(({ printAgain }) => printAgain.length > 0).length;
   const counts = [
-    again === 0 ? 'no chart needs to be printed again' : `charts of ${evenings(again)} are to be printed again`,
+    again === 0
+      ? 'no chart needs to be printed again'
+      : `charts of ${evenings(again)} are to be printed again`,
     ...(['gained', 'lost', 'moved'] as const).flatMap((kind) => {
       const count = touched.filter(({ showing }) => showing === kind).length;
       return count === 0 ? [] : [`${String(count)} showing${count === 1 ? ' is' : 's are'} ${kind}`];

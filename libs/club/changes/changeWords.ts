@@ -10,9 +10,11 @@ const CHART_WORDS = { eye: 'unaided-eye', binocular: 'binocular', eyepiece: 'eye
  * they came, which to print again, and what becomes of its showing. `since` names the day they came.
  */
 export function changeSentence(body: string, change: EveningChange, since: string, zone: string): string {
-  return [placeSentence(body, change, since), ...showingSentence(change, zone), ...magnitudeSentence(change)].join(
-    ' ',
-  );
+  return [
+    placeSentence(body, change, since),
+    ...showingSentence(change, zone),
+    ...magnitudeSentence(change),
+  ].join(' ');
 }
 
 function placeSentence(body: string, { shift, printAgain }: EveningChange, since: string): string {

@@ -62,7 +62,9 @@ export async function eventChanges(
   const { id, locale } = await getClub(database);
   const coming = await comingEvenings(database, id);
   const evenings =
-    eventId === undefined ? coming : coming.filter(({ events }) => events.some((event) => event.id === eventId));
+    eventId === undefined
+      ? coming
+      : coming.filter(({ events }) => events.some((event) => event.id === eventId));
   const changes = new Map<string, BodyChange[]>();
   for (const evening of evenings) {
     for (const { target: body } of evening.programme.items) {
@@ -73,7 +75,7 @@ export async function eventChanges(
         orderBy: { number: 'desc' },
       });
       if (judgedBy === null) continue;
-      for (const touched of touchedEvenings(body, judgedBy, newest, [evening], locale)) {
+      for (const touched of await touchedEvenings(body, judgedBy, newest, [evening], locale)) {
         for (const event of evening.events) {
           const known = changes.get(event.id) ?? [];
           changes.set(event.id, [...known, { target: body.name, ...touched }]);

@@ -1,6 +1,7 @@
 import { type ChartScale } from '#charts';
 import {
   createWorkbench,
+  DEFAULT_WEIGHTS,
   judgeEvening,
   type NightSite,
   prepareSeason,
@@ -9,7 +10,6 @@ import {
   type ProgrammeItem,
   type Showing,
 } from '#nights';
-import { DEFAULT_WEIGHTS } from '#nights';
 import { type OrbitTarget } from '#sky';
 import { perturbing, type Perturbing } from '../sky/perturbing';
 import { placeShift, type PlaceShift } from '../sky/placeShift';

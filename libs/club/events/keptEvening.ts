@@ -44,6 +44,7 @@ const KeptEvening: z.ZodType<JudgedEvening> = z.object({
           magnitudes: z.number(),
           ifBrighter: showingCase,
           ifFainter: showingCase,
+          matters: z.boolean().default(true),
           words: z.string(),
         })
         .nullable()

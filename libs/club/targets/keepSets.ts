@@ -1,6 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { type ChangeNotice } from '../changes/changeNotice';
 import { noticeOfNewSet } from '../changes/elementChanges';
+import { problem } from '../clubProblem';
 import { type Database } from '../database/openDatabase';
 import { type elementSetColumns, elementSetView, type ElementSetView } from './elementSets';
 import { type TargetRow } from './targetView';
@@ -33,6 +34,13 @@ export async function keepSets(
   }));
   const last = rows.at(-1);
   const change = last === undefined ? null : await noticeOfNewSet(database, target, last);
-  await database.client.elementSet.createMany({ data: rows });
+  await database.client.$transaction(async (tx) => {
+    const inUse = await tx.elementSet.count({ where: { targetId: target.id } });
+    if (inUse !== newest) {
+      const why = 'Other elements of it came in at the same moment; look at them, then send these again.';
+      throw problem('conflict', 'target', target.name, `${target.name} was not changed. ${why}`);
+    }
+    await tx.elementSet.createMany({ data: rows });
+  });
   return { sets: rows.map(elementSetView), change };
 }

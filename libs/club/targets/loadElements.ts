@@ -111,8 +111,9 @@ type SetColumns = ReturnType<typeof elementSetColumns>;
 
 function isInUse(set: SetColumns, inUse: Prisma.ElementSetModel | undefined): boolean {
   if (inUse === undefined) return false;
-  const { source: _source, givenText: _given, ...orbit } = set;
-  return Object.entries(orbit).every(([field, value]) => inUse[field as keyof typeof orbit] === value);
+  // Where it is from, and which of its fields were given, makes no other orbit of it.
+  const fields = Object.keys(set) as (keyof SetColumns)[];
+  return fields.every((field) => field === 'source' || field === 'givenText' || inUse[field] === set[field]);
 }
 
 /** What a set says of where it is from and of the observations behind it. */
@@ -147,11 +148,11 @@ function nothingOf(
     );
   }
   const wanted = body ?? namesOf(row).join(' or ');
-  const there = others.slice(0, 10).join(', ') || 'no body at all';
+  const there = others.length === 0 ? '' : `; it holds ${others.slice(0, 10).join(', ')}`;
   return problem(
     'invalid',
     body === undefined ? 'text' : 'body',
     body ?? null,
-    `Nothing in it is of ${wanted}; it holds ${there}. Name the body that is meant with body.`,
+    `Nothing in it is of ${wanted}${there}. Name the body that is meant with body.`,
   );
 }

@@ -1,5 +1,6 @@
 import { parseDesignation } from '#elements';
 import { MS_PER_DAY, type OrbitTarget, place, utcMsToTtJd } from '#sky';
+import { type BodyMotion, bodyMotion } from '../sky/bodyMotion';
 import { perturbing, type Perturbing } from '../sky/perturbing';
 import { placeShift } from '../sky/placeShift';
 import { type ObservedArc, observedArc, type ArcSources } from './observedArc';
@@ -44,6 +45,8 @@ export interface BodyTrust {
   readonly eyepiece: FieldShare | null;
   /** Whether newer elements should be had before charts are printed (common practice). */
   readonly refresh: boolean;
+  /** How it moves across the sky meanwhile, and where a tail would point. */
+  readonly motion: BodyMotion;
   /** One line for a page, and the whole account with the rule it rests on. */
   readonly line: string;
   readonly words: string;
@@ -74,8 +77,10 @@ export function bodyTrust(
   const { epochTtJd } = target.elements;
   const arc = observedArc(body);
   const numbered = parseDesignation(designation).number !== null;
+  const moving = perturbed(target, utcMs);
   const common = {
     body: target.name,
+    motion: bodyMotion(moving, kind, utcMs),
     at: new Date(utcMs).toISOString(),
     observedArcDays: arc?.days ?? null,
     arcFrom: arc?.from ?? null,
@@ -85,7 +90,6 @@ export function bodyTrust(
     const told = { ...facts, finder: null, eyepiece: null, refresh: true };
     return { ...told, ...trustWords(told, kind, numbered) };
   }
-  const moving = perturbed(target, utcMs);
   const ageDays = utcMsToTtJd(utcMs) - epochTtJd;
   const seen = place(moving, utcMs, null);
   const expectedError = expectedPlaceError({

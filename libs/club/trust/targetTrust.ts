@@ -56,7 +56,9 @@ export async function trustOfEvent(database: Database, event: EventView): Promis
 
 function trustedBody(row: TargetRow): TrustedBody {
   const [set] = row.elementSets;
-  if (set === undefined) throw new Error(`Target ${row.id} (${row.name}) of the database has no element set.`);
+  if (set === undefined) {
+    throw new Error(`Target ${row.id} (${row.name}) of the database has no element set.`);
+  }
   return {
     target: orbitTargetOf(row, set),
     kind: set.bodyKind === 'comet' ? 'comet' : 'asteroid',

@@ -24,7 +24,9 @@ export function trustWords(
     `The planets have moved it ${arcWords(movedByPlanetsArcsec ?? 0)} since the epoch; that is reckoned in.`,
     arcSentence(facts, numbered),
     ...(kind === 'comet'
-      ? ['A comet is also pushed by its own outgassing, which is not modelled here and counts in the bad case.']
+      ? [
+          'A comet is also pushed by its own outgassing, which is not modelled here and counts in the bad case.',
+        ]
       : []),
     `The bad case comes to ${shareWords(eyepiece, 'eyepiece')} and ${shareWords(finder, 'finder')}.`,
     `This is a rule of thumb (common practice), not an error bar.${
@@ -79,7 +81,7 @@ function offWords(likely: number, bad: number): string {
 
 /** An angle as people say it, to two figures. */
 function arcWords(arcsec: number): string {
-  if (arcsec < 1) return 'under 1 arcsec';
+  if (arcsec < 1) return 'less than 1 arcsec';
   if (arcsec < 60) return `${figures(arcsec)} arcsec`;
   if (arcsec < 7200) return `${figures(arcsec / 60)} arcmin`;
   return `${figures(arcsec / 3600)} degrees`;
