@@ -28,6 +28,9 @@ export function demoSites(asOf: string): readonly SiteInput[] {
       ]),
       domes: [{ azimuthDeg: 285, widthDeg: 50, brighteningMag: 0.7 }],
       gate: { opens: null, closes: '01:30' },
+      hazards: 'Uneven turf and guy lines; cattle grid at the gate. Wind chill is severe from October on.',
+      emergencyWords:
+        'No mobile signal on top: walk to the chapel, 10 minutes down the road. The nearest doctor on call is in Lower Hollin.',
       directions:
         'Forest road from Lower Hollin, the last 3 km unpaved. Park in the clearing on the left, nose out. No mobile signal beyond the chapel.',
     },
@@ -53,6 +56,9 @@ export function demoSites(asOf: string): readonly SiteInput[] {
       ]),
       domes: [{ azimuthDeg: 210, widthDeg: 40, brighteningMag: 0.9 }],
       gate: { opens: '17:30', closes: '23:30' },
+      hazards: 'Stubble and a ditch along the east edge; farm traffic until 19:00.',
+      emergencyWords:
+        'Mobile signal is good. Tell rescuers: Quern Field, the barn with the millstone on the valley road.',
       directions:
         'Turn in at the millstone on the valley road. Park on the stubble east of the barn; the farm dog is friendly and loud.',
     },

@@ -21,3 +21,15 @@ export function header(request: Request, name: string): string | undefined {
   const value = request.headers[name];
   return Array.isArray(value) ? value[0] : value;
 }
+
+/** Sends a drawn sheet or packet to be looked at in the browser, which asks again before it shows it again. */
+export function sendSheet(
+  reply: Reply,
+  sheet: { readonly contentType: string; readonly body: Buffer; readonly fileName: string },
+): void {
+  reply
+    .setHeader('Content-Type', sheet.contentType)
+    .setHeader('Content-Disposition', `inline; filename*=UTF-8''${encodeURIComponent(sheet.fileName)}`)
+    .setHeader('Cache-Control', 'no-cache')
+    .send(sheet.body);
+}

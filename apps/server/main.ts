@@ -1,5 +1,5 @@
 import 'reflect-metadata';
-import { closeDatabase, closeSearchPool, findClub, openDatabase } from '#club';
+import { closeDatabase, closePacketPool, closeSearchPool, findClub, openDatabase } from '#club';
 import pino from 'pino';
 import { createApplication } from './application';
 import { readSettings } from './environment';
@@ -24,6 +24,7 @@ async function start(): Promise<void> {
     application.get(SearchJobs).stopAll();
     await application.close();
     await closeSearchPool();
+    await closePacketPool();
     await closeDatabase(database);
     process.exit(0);
   };

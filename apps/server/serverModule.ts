@@ -5,6 +5,7 @@ import { ClubController } from './api/clubController';
 import { EveningsController } from './api/eveningsController';
 import { EventsController } from './api/eventsController';
 import { InstrumentsController } from './api/instrumentsController';
+import { PacketsController } from './api/packetsController';
 import { ProgrammesController } from './api/programmesController';
 import { SitesController } from './api/sitesController';
 import { TargetsController } from './api/targetsController';
@@ -33,6 +34,7 @@ export class ServerModule {
         SearchesController,
         EveningsController,
         ChartsController,
+        PacketsController,
         EventsController,
         FeedController,
         AssetsController,

@@ -18,6 +18,9 @@ import request from 'supertest';
 import { createApplication } from '../../apps/server/application';
 import { COMET_NAME, cometElementSets } from '../../demo-data/orbits';
 
+// Worker threads start on the way, on machines that may be busy.
+jest.setTimeout(30_000);
+
 const asOf = '2026-12-01';
 const comet = `Comet ${COMET_NAME}`;
 const path = `/api/targets/${encodeURIComponent(comet)}`;
@@ -33,7 +36,7 @@ beforeAll(async () => {
   await loadDemo(database, { asOf });
   application = await createApplication(database, pino({ level: 'silent' }));
   await application.listen(0, '127.0.0.1');
-}, 60_000);
+});
 afterAll(async () => {
   await application.close();
   await closeDatabase(database);

@@ -233,6 +233,22 @@ describe('evenings, events, charts', () => {
     await api().post(`${at}/publish`).expect(409);
   });
 
+  it('prints the packet of an event and remembers it', async () => {
+    const { body: event } = await api().post('/api/events').send(evening).expect(201);
+    const printed = await api()
+      .post(`/api/events/${event.id}/packets`)
+      .send({ sheets: ['runSheet'], paper: 'letter' })
+      .expect(200)
+      .expect('Content-Type', /application\/pdf/);
+    expect(printed.body.subarray(0, 5).toString()).toBe('%PDF-');
+    const { body: packets } = await api().get(`/api/events/${event.id}/packets`).expect(200);
+    expect(packets).toHaveLength(1);
+    await api().post('/api/events/nowhere/packets').send({}).expect(404);
+    const wrong = await api().post(`/api/events/${event.id}/packets`).send({ sheets: [] }).expect(400);
+    expect(wrong.body.problems[0].field).toBe('sheets');
+    await api().post(`/api/events/${event.id}/call-off`).send({ why: 'Done.' }).expect(200);
+  });
+
   it('draws the charts of an event', async () => {
     const { body } = await api().post('/api/events').send(evening).expect(201);
     const charts = `/api/events/${body.id}/charts`;
@@ -288,6 +304,8 @@ describe('the documentation', () => {
         'post /api/events/{id}/publish',
         'post /api/events/{id}/call-off',
         'get /api/events/{id}/charts/{target}',
+        'get /api/events/{id}/packets',
+        'post /api/events/{id}/packets',
         'get /api/events/{id}/changes',
         'get /api/events/{id}/trust',
         'get /calendar.ics',

@@ -4,6 +4,9 @@ import { join } from 'node:path';
 import { cometElementSets } from '../../demo-data/orbits';
 import { answer, duskwright } from './run';
 
+// Each call starts a process of its own, on machines that may be busy.
+jest.setTimeout(30_000);
+
 const asOf = '2026-12-01';
 const folder = mkdtempSync(join(tmpdir(), 'duskwright-elements-'));
 const database = join(folder, 'demo.db');

@@ -4,7 +4,7 @@ import { ApiOperation, ApiProduces, ApiTags } from '@nestjs/swagger';
 import { createZodDto } from 'nestjs-zod';
 import { z } from 'zod';
 import { OpenDatabase } from '../database';
-import { type Reply } from '../http';
+import { type Reply, sendSheet } from '../http';
 
 const FIELD_RIGHT = 'degrees from 0.1 to 120';
 
@@ -39,11 +39,6 @@ export class ChartsController {
     @Res() reply: Reply,
   ): Promise<void> {
     const { field: fieldDeg, ...wishes } = checked(ChartQuery, query);
-    const chart = await chartForEvent(this.database, { eventId, target, ...wishes, fieldDeg });
-    reply
-      .setHeader('Content-Type', chart.contentType)
-      .setHeader('Content-Disposition', `inline; filename*=UTF-8''${encodeURIComponent(chart.fileName)}`)
-      .setHeader('Cache-Control', 'no-cache')
-      .send(chart.body);
+    sendSheet(reply, await chartForEvent(this.database, { eventId, target, ...wishes, fieldDeg }));
   }
 }

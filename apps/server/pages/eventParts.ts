@@ -68,5 +68,8 @@ export function eventForms(event: EventView): Html {
     <label>Why it is called off, for the public <input name="why" required maxlength="400" /></label>
     <button>Call off<span class="hidden"> ${event.title}</span></button>
   </form>`;
-  return html`${event.status === 'draft' && publish}${callOff}`;
+  const packet = html`<form method="post" action="/events/${event.id}/packet">
+    <button>Print the packet<span class="hidden"> of ${event.title}</span></button>
+  </form>`;
+  return html`${event.status === 'draft' && publish}${packet}${callOff}`;
 }

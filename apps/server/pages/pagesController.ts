@@ -10,6 +10,7 @@ import {
   listSites,
   listTargets,
   makeEvent,
+  printPacket,
   publishEvent,
   SeasonInput,
 } from '#club';
@@ -18,7 +19,7 @@ import { ApiExcludeController } from '@nestjs/swagger';
 import { DateTime } from 'luxon';
 import { z } from 'zod';
 import { OpenDatabase } from '../database';
-import { header, type Reply, type Request } from '../http';
+import { header, type Reply, type Request, sendSheet } from '../http';
 import { eventPage } from './eventPage';
 import { frontPage } from './frontPage';
 import { KeptNotes } from './keptNotes';
@@ -107,6 +108,11 @@ export class PagesController {
   async publish(@Param('id') id: string, @Res() reply: Reply): Promise<void> {
     await publishEvent(this.database, id);
     reply.redirect(303, `/events/${encodeURIComponent(id)}`);
+  }
+
+  @Post('events/:id/packet')
+  async packet(@Param('id') eventId: string, @Res() reply: Reply): Promise<void> {
+    sendSheet(reply, await printPacket(this.database, { eventId }));
   }
 
   @Post('events/:id/call-off')
