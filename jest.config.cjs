@@ -28,4 +28,6 @@ module.exports = {
   },
   modulePathIgnorePatterns: ['<rootDir>/dist/'],
   testEnvironment: 'node',
+  // Room for a busy machine: workers start and databases are made in many tests.
+  testTimeout: 60_000,
 };

@@ -44,18 +44,19 @@ export async function loadDemo(database: Database, { asOf }: { readonly asOf: st
   for (const instrument of DEMO_INSTRUMENTS) await createInstrument(database, instrument);
   const targets = demoTargets(asOf);
   for (const target of targets) await createTarget(database, target);
-  const comet = `Comet ${COMET_NAME}`;
-  await addElementSet(database, comet, cometElementSets(asOf)[1]);
   for (const programme of DEMO_PROGRAMMES) await createProgramme(database, programme);
   await createClubDate(database, { date: fridayAfter(asOf, 40), name: 'annual meeting' });
   await createClubDate(database, { date: fridayAfter(asOf, 75), name: 'telescope-making course' });
+  const event = await publishBest(database, asOf);
+  // After the event was judged, so that the program has something to say of what new elements change.
+  await addElementSet(database, `Comet ${COMET_NAME}`, cometElementSets(asOf)[1]);
   return {
     club: club.name,
     asOf,
     sites: sites.length,
     targets: targets.length,
     programmes: DEMO_PROGRAMMES.length,
-    event: await publishBest(database, asOf),
+    event,
   };
 }
 
