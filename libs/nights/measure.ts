@@ -37,7 +37,7 @@ export interface MeasuredTarget {
   highestSine: number;
   /** Worked out only where the evening was measured closely. */
   readonly best: MeasuredBest;
-  /** How many of the coarse steps each hindrance spoiled. */
+  /** How many of the coarse steps each hindrance spoiled; counted only where measured closely. */
   readonly hindrances: Record<Hindrance, number>;
 }
 
@@ -130,7 +130,6 @@ function measureTarget(
 ): void {
   resetMeasured(measured);
   if (!bench.closely && staysLow(season, site, item, hours)) {
-    measured.hindrances.low = count;
     bench.steps += count;
     return;
   }
@@ -140,7 +139,7 @@ function measureTarget(
     const instant = instantAt(bench, season, site, hours, k * PARTS);
     lookAt(looks[k]!, season, site, instant, item, bench.closely);
     bench.steps++;
-    measured.hindrances[looks[k]!.hindrance]++;
+    if (bench.closely) measured.hindrances[looks[k]!.hindrance]++;
     if (looks[k]!.hindrance !== 'none') continue;
     measured.highestSine = Math.max(measured.highestSine, looks[k]!.sinAltitude);
     if (bench.closely) considerBest(measured.best, looks[k]!, instant.utcMs);

@@ -77,6 +77,10 @@ export function createSiteInstant(): SiteInstant {
 
 const place = new Float64Array(3);
 
+// Bound once: reaching through a library's door costs in a loop of millions.
+const placeOf = trackPlace;
+const siderealAt = seasonSidereal;
+
 /** Airless topocentric altitude of a track's body at a site, radians; allocates nothing. */
 export function trackAltitude(track: Track, season: Season, site: PreparedSite, utcMs: number): number {
   return limbAltitude(track, season, site, 0, utcMs);
@@ -90,10 +94,10 @@ export function limbAltitude(
   radiusAu: number,
   utcMs: number,
 ): number {
-  const sidereal = seasonSidereal(season.frame, utcMs) + site.site.observer.longitudeRad;
+  const sidereal = siderealAt(season.frame, utcMs) + site.site.observer.longitudeRad;
   const cos = Math.cos(sidereal);
   const sin = Math.sin(sidereal);
-  trackPlace(track, utcMs, place);
+  placeOf(track, utcMs, place);
   const along = cos * place[0]! + sin * place[1]! - site.fromAxisAu;
   const across = cos * place[1]! - sin * place[0]!;
   const north = place[2]! - site.fromEquatorAu;
@@ -109,7 +113,7 @@ export function setSiteInstant(
   site: PreparedSite,
   utcMs: number,
 ): void {
-  const sidereal = seasonSidereal(season.frame, utcMs) + site.site.observer.longitudeRad;
+  const sidereal = siderealAt(season.frame, utcMs) + site.site.observer.longitudeRad;
   const cos = Math.cos(sidereal);
   const sin = Math.sin(sidereal);
   const standX = site.fromAxisAu * cos;
@@ -119,7 +123,7 @@ export function setSiteInstant(
   instant.cosSidereal = cos;
   instant.sinSidereal = sin;
 
-  trackPlace(season.sun, utcMs, place);
+  placeOf(season.sun, utcMs, place);
   const sunX = place[0]! - standX;
   const sunY = place[1]! - standY;
   const sunZ = place[2]! - standZ;
@@ -130,7 +134,7 @@ export function setSiteInstant(
   instant.sunAltitudeRad = Math.asin(sineAltitude(site, instant, instant.sunX, instant.sunY, instant.sunZ));
   const sunAzimuth = azimuth(site, instant, instant.sunX, instant.sunY, instant.sunZ);
 
-  trackPlace(season.moon, utcMs, place);
+  placeOf(season.moon, utcMs, place);
   const moonX = place[0]! - standX;
   const moonY = place[1]! - standY;
   const moonZ = place[2]! - standZ;

@@ -20,6 +20,7 @@ import {
   whyClosed,
 } from '#nights';
 import { type BlockTask, type ItemsTask, type SkyTask } from './searchWorker';
+import { withSharedArrays } from './sharedArrays';
 import { searchPool } from './workerPool';
 
 /** A season to search: what is promised, where, and on which dates. */
@@ -135,12 +136,12 @@ async function preparedSeason({ programme, from, to }: SeasonSearch, inWorker: I
       inWorker<SeasonItems>('itemsOfSeason', { sky, items } satisfies ItemsTask),
     ),
   );
-  return {
+  return withSharedArrays({
     programme,
     ...sky,
     tracks: parts.flatMap(({ tracks }) => tracks),
     limits: parts.flatMap(({ limits }) => limits),
-  };
+  });
 }
 
 /** The rows' evenings in full, in the order of the rows. */

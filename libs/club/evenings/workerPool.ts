@@ -16,6 +16,8 @@ export function searchPool(): Piscina {
     // An idle pool does not keep threads for a server that searches once a day.
     minThreads: 0,
     idleTimeout: 30_000,
+    // Fewer and cheaper collections of short-lived numbers.
+    resourceLimits: { maxYoungGenerationSizeMb: 64 },
   });
   return pool;
 }
