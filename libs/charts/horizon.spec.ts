@@ -1,4 +1,4 @@
-import { compass, compassPoint, localSky, positionAngle } from './horizon';
+import { localSky, positionAngle } from './horizon';
 
 const degree = Math.PI / 180;
 const arcsec = degree / 3600;
@@ -73,16 +73,5 @@ describe('positionAngle', () => {
     const from = { raRad: 213.9154 * degree, decRad: 19.1825 * degree };
     const to = { raRad: 201.2983 * degree, decRad: -11.1614 * degree };
     expect((positionAngle(from, to) / degree + 360) % 360).toBeCloseTo(203.3084, 3);
-  });
-});
-
-describe('compassPoint', () => {
-  it('names the nearest of the eight', () => {
-    expect(compassPoint(0).letters).toBe('N');
-    expect(compassPoint(359 * degree).letters).toBe('N');
-    expect(compassPoint(112 * degree).letters).toBe('E');
-    expect(compassPoint(113 * degree).word).toBe('south-east');
-    expect(compassPoint(-46 * degree).letters).toBe('NW');
-    expect(compass).toHaveLength(16);
   });
 });

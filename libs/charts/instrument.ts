@@ -1,4 +1,5 @@
-import { compassPoint, type LocalSky } from './horizon';
+import { compassPoint } from '#sky';
+import type { LocalSky } from './horizon';
 import type { ChartRequest, ChartScale, Orientation } from './request';
 
 const scaleWords: Readonly<Record<ChartScale, string>> = {
@@ -15,7 +16,7 @@ export function instrumentLines(request: ChartRequest, fieldDeg: number, sky: Lo
   if (request.scale === 'eye' && sky !== null) {
     const { altitudeRad, azimuthRad } = sky.altAz(request.target);
     const height = Math.round((altitudeRad * 180) / Math.PI);
-    lines.push(`Face ${compassPoint(azimuthRad).word}, look ${String(height)}° up`);
+    lines.push(`Face ${compassPoint(azimuthRad, 8).word}, look ${String(height)}° up`);
   } else {
     lines.push(`${coordinateWords(request.target.raRad, request.target.decRad)} (J2000)`);
   }

@@ -1,4 +1,5 @@
-import { compass, type CompassPoint, compassPoint, type LocalSky } from './horizon';
+import { COMPASS, type CompassPoint, compassPoint } from '#sky';
+import type { LocalSky } from './horizon';
 import { type LabelWish } from './labels';
 import { spotAt, spotsBeside } from './labelSpots';
 import type { Box, Line } from './lines';
@@ -48,7 +49,7 @@ export function standingUnder(
     return { ...altitude, walls: [], isBelowGround: isGround, bars: () => false };
   }
   const shared = { of: null, layer: 'under', clipped: true } as const;
-  const facing = compassPoint(targetAzimuthRad);
+  const facing = compassPoint(targetAzimuthRad, 8);
   const marks: Mark[] = [
     {
       ...shared,
@@ -136,7 +137,7 @@ function groundOutline(
 
 /** The letters of the compass under the level horizon, the one to face larger. */
 function compassWishes(sky: LocalSky, plate: Plate, facing: CompassPoint): LabelWish[] {
-  return compass.flatMap((point) => {
+  return COMPASS.flatMap((point) => {
     const spot = underHorizon(sky, plate, point.azimuthRad, point === facing ? 4.6 : 3.8);
     if (spot === null) return [];
     return [

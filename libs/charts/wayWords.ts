@@ -1,5 +1,6 @@
 import { namedStars, type Star, type StarCatalogue } from '#catalogue';
-import { compassPoint, type LocalSky, positionAngle } from './horizon';
+import { compassPoint } from '#sky';
+import { type LocalSky, positionAngle } from './horizon';
 import { coordinateWords, declinationWords, fieldWords } from './instrument';
 import { type Landmark, separationOf, surroundingsRad } from './landmarks';
 import { starKey } from './labelWords';
@@ -108,7 +109,7 @@ function landingWords({ star, partner, rivals }: Landmark): string {
 function whereWords(place: SkyPoint, { sky }: WayScene): string {
   if (sky === null) return '';
   const { altitudeRad, azimuthRad } = sky.altAz(place);
-  return `, ${String(Math.round(altitudeRad / degree))}° high in the ${compassPoint(azimuthRad).word}`;
+  return `, ${String(Math.round(altitudeRad / degree))}° high in the ${compassPoint(azimuthRad, 8).word}`;
 }
 
 /** Above this left and right mean little: one leans back and any side may be up. */
@@ -124,22 +125,12 @@ const turns = [
   'right',
   'up and right',
 ] as const;
-const sides = [
-  'north',
-  'north-east',
-  'east',
-  'south-east',
-  'south',
-  'south-west',
-  'west',
-  'north-west',
-] as const;
 
 /** Which way to go: as one stands facing there, or by the sky's own north where that would mislead. */
 function turnWords(from: SkyPoint, to: SkyPoint, { sky }: WayScene): string {
   const heading = positionAngle(from, to);
   const eighth = (angle: number): number => ((Math.round(angle / (Math.PI / 4)) % 8) + 8) % 8;
-  const side = `to the ${sides[eighth(heading)]!}`;
+  const side = `to the ${compassPoint(heading, 8).word}`;
   if (sky === null || sky.altAz(from).altitudeRad > nearOverhead) return side;
   const turn = turns[eighth(heading - positionAngle(from, sky.zenith))]!;
   // Beside a pole north and east change within a step.

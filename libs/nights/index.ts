@@ -9,7 +9,7 @@ export { prepareSite, type PreparedSite } from './siteInstant';
 export { createWorkbench, type Workbench, STEP_MS } from './measure';
 export * from './score';
 export * from './rules';
-export { clockWords, compassPoint, listWords } from './words';
+export { clockWords, listWords, sideWords } from './words';
 export * from './judge';
 export * from './search';
 export * from './habit';

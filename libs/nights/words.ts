@@ -1,31 +1,12 @@
 import { DateTime } from 'luxon';
-import { toDeg } from '#sky';
+import { compassPoint, toDeg, toRad } from '#sky';
 import { type MeasuredTarget } from './measure';
 import { type Programme, type ProgrammeItem } from './programme';
 import { type EveningShares } from './score';
 
-const COMPASS = [
-  'N',
-  'NNE',
-  'NE',
-  'ENE',
-  'E',
-  'ESE',
-  'SE',
-  'SSE',
-  'S',
-  'SSW',
-  'SW',
-  'WSW',
-  'W',
-  'WNW',
-  'NW',
-  'NNW',
-] as const;
-
-/** The compass point nearest to an azimuth in degrees. */
-export function compassPoint(azimuthDeg: number): string {
-  return COMPASS[((Math.round(azimuthDeg / 22.5) % 16) + 16) % 16]!;
+/** The nearest of the eight compass points to an azimuth in degrees, as people say it: 'south-west'. */
+export function sideWords(azimuthDeg: number): string {
+  return compassPoint(toRad(azimuthDeg), 8).word;
 }
 
 /** A local time to the nearest minute, 'HH:MM'. */
@@ -45,7 +26,7 @@ export function showingWords(item: ProgrammeItem, measured: MeasuredTarget, zone
     }
     const { best } = measured;
     const height = Math.round(toDeg(Math.asin(best.sinAltitude)));
-    return `From ${stretches.join(' and ')}; best at ${clockWords(best.utcMs, zone)}, ${height} degrees high in the ${compassPoint(toDeg(best.azimuthRad))}.`;
+    return `From ${stretches.join(' and ')}; best at ${clockWords(best.utcMs, zone)}, ${height} degrees high in the ${compassPoint(best.azimuthRad, 16).letters}.`;
   }
   const reason = mainHindrance(item, measured);
   return measured.totalMs > 0

@@ -1,18 +1,6 @@
-import { clockWords, type Interval } from '#nights';
+import { clockWords, type Interval, sideWords } from '#nights';
 import { DateTime } from 'luxon';
 import { type PacketContent, type SkyPlace, type Standing } from './content';
-
-/** The eight points that people say. */
-const POINTS = [
-  'north',
-  'north-east',
-  'east',
-  'south-east',
-  'south',
-  'south-west',
-  'west',
-  'north-west',
-] as const;
 
 /** Above this a compass direction says little. */
 const OVERHEAD_DEG = 80;
@@ -21,7 +9,7 @@ const OVERHEAD_DEG = 80;
 export function standingWords({ altitudeDeg, azimuthDeg }: SkyPlace): string {
   const height = `${String(Math.round(altitudeDeg))}° high`;
   if (altitudeDeg >= OVERHEAD_DEG) return `${height}, almost overhead`;
-  return `${height} in the ${POINTS[((Math.round(azimuthDeg / 45) % 8) + 8) % 8]!}`;
+  return `${height} in the ${sideWords(azimuthDeg)}`;
 }
 
 /** "Saturday 14 March 2027", as the club's own English has it. */

@@ -10,6 +10,7 @@ export * from './magnitude';
 export * from './appearance';
 export * from './place';
 export * from './altitudes';
+export * from './compass';
 export * from './constellation';
 export * from './moons';
 export * from './rings';

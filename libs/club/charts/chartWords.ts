@@ -1,6 +1,5 @@
 import { type ChartWords } from '#charts';
-import { compassPoint } from '#nights';
-import { HOUR, type Place, toDeg, utcMsToTtJd } from '#sky';
+import { compassPoint, HOUR, type Place, toDeg, utcMsToTtJd } from '#sky';
 import { DateTime } from 'luxon';
 import { type ChartOrder } from './chartFor';
 import { lookNote } from './lookNote';
@@ -37,7 +36,7 @@ function placeNote({ astrometric, horizontal }: Place): string {
   const altitude = Math.round(toDeg(horizontal.altitudeRad));
   return altitude < 0
     ? `${where}; below the horizon at this hour.`
-    : `${where}; ${altitude}° high in the ${compassPoint(toDeg(horizontal.azimuthRad))}.`;
+    : `${where}; ${altitude}° high in the ${compassPoint(horizontal.azimuthRad, 16).letters}.`;
 }
 
 function brightnessNote({ target }: ChartOrder, { magnitude, magnitudeRange }: Place): string[] {

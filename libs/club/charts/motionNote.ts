@@ -1,19 +1,9 @@
-import { fromSpherical, place, positionAngle, separation, toDeg } from '#sky';
+import { compassPoint, fromSpherical, place, positionAngle, separation, toDeg } from '#sky';
 import { type ChartOrder } from './chartFor';
 
 const HOUR_MS = 3_600_000;
 /** Slower than this nobody sees it move in an evening, arcminutes an hour. */
 const LEAST_ARCMIN = 0.05;
-const SIDES = [
-  'north',
-  'north-east',
-  'east',
-  'south-east',
-  'south',
-  'south-west',
-  'west',
-  'north-west',
-] as const;
 
 /** How far a moving target goes in an hour, and which way; nothing for what stands still. */
 export function motionNote({ target, observer, utcMs }: ChartOrder): string[] {
@@ -25,7 +15,7 @@ export function motionNote({ target, observer, utcMs }: ChartOrder): string[] {
     toDeg(separation(fromSpherical(from!.raRad, from!.decRad), fromSpherical(to!.raRad, to!.decRad))) * 60;
   if (arcmin < LEAST_ARCMIN) return [];
   const angle = positionAngle(from!.raRad, from!.decRad, to!.raRad, to!.decRad);
-  const side = SIDES[Math.round(angle / (Math.PI / 4)) % 8]!;
+  const side = compassPoint(angle, 8).word;
   return [`Moves ${lengthWords(arcmin)} an hour towards the ${side}.`];
 }
 

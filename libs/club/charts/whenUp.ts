@@ -1,6 +1,5 @@
 import { crossings } from '#darkness';
-import { compassPoint } from '#nights';
-import { place, toDeg } from '#sky';
+import { compassPoint, place } from '#sky';
 import { DateTime } from 'luxon';
 import { type ChartOrder } from './chartFor';
 
@@ -21,7 +20,7 @@ export function whenUp({ target, observer, zone, utcMs }: ChartOrder): string {
   const rise = found.find(({ rising }) => rising);
   if (rise === undefined) return 'it does not rise there on that date';
   const set = found.find(({ rising, utcMs: at }) => !rising && at > rise.utcMs);
-  const where = compassPoint(toDeg(horizontal(rise.utcMs).azimuthRad));
+  const where = compassPoint(horizontal(rise.utcMs).azimuthRad, 16).letters;
   const until = set === undefined ? 'and stays up' : `and sets on ${clockDate(set.utcMs, zone)}`;
   return `it rises next on ${clockDate(rise.utcMs, zone)} (${zone}) in the ${where} ${until}`;
 }

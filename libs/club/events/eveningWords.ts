@@ -1,6 +1,6 @@
 import { clockWords, type Interval, type JudgedEvening, type Showing } from '#nights';
+import { compassPoint, toRad } from '#sky';
 import { DateTime } from 'luxon';
-import { pointWords } from '../sky/pointWords';
 
 /** A calendar date in words: 'Saturday 14 March', with the year where `withYear` asks for it. */
 export function dateWords(date: string, locale: string, withYear = false): string {
@@ -51,5 +51,5 @@ export function directionWords({ best }: Showing): string {
   if (best === null) return 'not to be seen';
   const height = `${String(Math.round(best.altitudeDeg))} degrees high`;
   if (best.altitudeDeg >= OVERHEAD_DEG) return `${height}, almost overhead`;
-  return `${height} in the ${pointWords(best.azimuthDeg)}`;
+  return `${height} in the ${compassPoint(toRad(best.azimuthDeg), 16).word}`;
 }

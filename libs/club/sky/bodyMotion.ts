@@ -1,5 +1,13 @@
-import { fromSpherical, place, positionAngle, separation, type SkyTarget, toDeg } from '#sky';
-import { pointWords } from './pointWords';
+import {
+  compassPoint,
+  fromSpherical,
+  place,
+  positionAngle,
+  separation,
+  type SkyTarget,
+  toDeg,
+  toRad,
+} from '#sky';
 
 /** How a comet or asteroid moves across the sky at an instant, and where a comet's tail points. */
 export interface BodyMotion {
@@ -28,7 +36,7 @@ export function bodyMotion(moving: SkyTarget, kind: 'comet' | 'asteroid', utcMs:
   const way = separation(fromSpherical(from.raRad, from.decRad), fromSpherical(to.raRad, to.decRad));
   const arcminPerHour = toDeg(way) * 60;
   const positionAngleDeg = toDeg(positionAngle(from.raRad, from.decRad, to.raRad, to.decRad));
-  const direction = pointWords(positionAngleDeg);
+  const direction = compassPoint(toRad(positionAngleDeg), 16).word;
   const tailPositionAngleDeg = kind === 'comet' ? awayFromSunDeg(moving, utcMs) : null;
   const moves =
     arcminPerHour < SEEN_ARCMIN_PER_HOUR
@@ -37,7 +45,7 @@ export function bodyMotion(moving: SkyTarget, kind: 'comet' | 'asteroid', utcMs:
   const tail =
     tailPositionAngleDeg === null
       ? ''
-      : `; a tail would point ${pointWords(tailPositionAngleDeg)} (position angle ${tailPositionAngleDeg.toFixed(0)} degrees), away from the Sun`;
+      : `; a tail would point ${compassPoint(toRad(tailPositionAngleDeg), 16).word} (position angle ${tailPositionAngleDeg.toFixed(0)} degrees), away from the Sun`;
   return { arcminPerHour, positionAngleDeg, direction, tailPositionAngleDeg, words: `${moves}${tail}.` };
 }
 

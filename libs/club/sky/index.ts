@@ -4,6 +4,5 @@ export { type ElementsOrigin, fixedTarget, namedTarget, type NamedTarget, orbitT
 export { compareElements, type ElementShift, elementState, type ElementState } from './elementState';
 export { type BodyMotion, bodyMotion } from './bodyMotion';
 export { placeShift, type PlaceShift, type ScaleShift, shiftWords } from './placeShift';
-export { pointWords } from './pointWords';
 export { perturbing, type Perturbing } from './perturbing';
 export { programVersion } from '../programVersion';

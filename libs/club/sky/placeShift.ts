@@ -1,6 +1,7 @@
 import { type ChartScale, usualFieldDeg } from '#charts';
 import {
   ARCSEC,
+  compassPoint,
   fromSpherical,
   type Observer,
   place,
@@ -10,7 +11,6 @@ import {
   toDeg,
   toRad,
 } from '#sky';
-import { pointWords } from './pointWords';
 
 /** What a shift in place comes to on the sheets of one scale. */
 export interface ScaleShift {
@@ -72,7 +72,7 @@ export function placeShift(
     shiftArcsec: shiftRad / ARCSEC,
     shiftArcmin: shiftRad / ARCSEC / 60,
     positionAngleDeg,
-    direction: pointWords(positionAngleDeg),
+    direction: compassPoint(toRad(positionAngleDeg), 16).word,
     magnitudeChange: from.magnitude === null || to.magnitude === null ? null : to.magnitude - from.magnitude,
     scales: SCALES.map((scale) => scaleShift(scale, shiftRad)),
   };
