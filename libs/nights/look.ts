@@ -6,7 +6,7 @@ import {
   limitFromTable,
   skyLuminance,
 } from '#darkness';
-import { refractionTrueToApparent, toRad, trackMagnitude, trackPlace } from '#sky';
+import { refractionTrueToApparent, SUN_CLEARANCE_RAD, SUN_UP_RAD, trackMagnitude, trackPlace } from '#sky';
 import { horizonAltitude } from './horizon';
 import { type PublicHours } from './hours';
 import { type Season } from './season';
@@ -31,10 +31,9 @@ export function createLook(): Look {
   return { hindrance: 'low', sinAltitude: 0, azimuthRad: NaN, luminanceNl: NaN, margin: NaN };
 }
 
-/** While the Sun is up no instrument is pointed nearer to it than this (common practice). */
-const SUN_CLEARANCE_RAD = toRad(15);
+/** The rule of isNearRisenSun, for the inner loop: it has the cosine, not the angle. */
 const COS_SUN_CLEARANCE = Math.cos(SUN_CLEARANCE_RAD);
-const SUN_UP_RAD = toRad(-0.8333);
+const SUN_UP = SUN_UP_RAD;
 
 /** Airmass over the sine of the airless altitude, 0 to 1, ready to be looked up. */
 const AIRMASS_STEPS = 2048;
@@ -178,7 +177,7 @@ export function lookAt(
     }
   }
   if (
-    instant.sunAltitudeRad > SUN_UP_RAD &&
+    instant.sunAltitudeRad > SUN_UP &&
     x * instant.sunX + y * instant.sunY + z * instant.sunZ > COS_SUN_CLEARANCE
   ) {
     look.hindrance = 'sun';

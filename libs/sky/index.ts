@@ -19,4 +19,5 @@ export * from './chebyshev';
 export { type Perturber, perturberTable, type PerturberTable } from './perturbers';
 export * from './perturbedMotion';
 export * from './perturbedTarget';
+export * from './sunSafety';
 export * from './track';

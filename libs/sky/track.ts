@@ -1,5 +1,5 @@
 import { toRad } from './angles';
-import { illuminatedFraction, phaseAngle } from './appearance';
+import { phaseAngle } from './appearance';
 import { type Chebyshev, evaluateChebyshev, fitChebyshev, type Sampler } from './chebyshev';
 import { aberrate, brightnessOf, heliocentric, whenLightLeft } from './place';
 import { apparentMoon, earthState, j2000ToDate } from './solarSystem';
@@ -111,10 +111,6 @@ export function trackMagnitude(track: Track, utcMs: number): number {
 /** Phase angle in radians at an instant; NaN for what does not shine by sunlight. */
 export function trackPhaseAngle(track: Track, utcMs: number): number {
   return fromDaily(track.dailyPhaseAngle, track.fromMs, utcMs);
-}
-
-export function trackIlluminatedFraction(track: Track, utcMs: number): number {
-  return illuminatedFraction(trackPhaseAngle(track, utcMs));
 }
 
 function fromDaily(table: Float64Array, fromMs: number, utcMs: number): number {

@@ -11,7 +11,7 @@ import {
   type SkylinePoint,
   usualFieldDeg,
 } from '#charts';
-import { type Observer, type Place, place, positionAngle, type SkyTarget, toDeg } from '#sky';
+import { isNearRisenSun, type Observer, type Place, place, positionAngle, type SkyTarget, toDeg } from '#sky';
 import { DateTime } from 'luxon';
 import { problem } from '../clubProblem';
 import { movedTarget, type NamedTarget } from '../sky/namedTarget';
@@ -56,7 +56,6 @@ export interface DrawnChart {
 }
 
 const SUN: SkyTarget = { kind: 'solarSystem', name: 'Sun', body: 'Sun' };
-const SUN_CLEARANCE_DEG = 15;
 
 /**
  * The scene of a chart. Throws a ClubProblem where the target is the Sun or stands within 15 degrees of a Sun
@@ -160,7 +159,7 @@ function refuseBelowHorizon(order: ChartOrder, seen: Place): void {
 function refuseNearSun({ target, observer, utcMs }: ChartOrder, seen: Place): void {
   const isSun = target.kind === 'Sun';
   const sun = place(SUN, utcMs, observer).horizontal!;
-  if (!isSun && (toDeg(sun.altitudeRad) < -0.8333 || toDeg(seen.elongationRad) >= SUN_CLEARANCE_DEG)) return;
+  if (!isSun && !isNearRisenSun(seen.elongationRad, sun.altitudeRad)) return;
   throw problem(
     'invalid',
     'target',

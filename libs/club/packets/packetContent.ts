@@ -7,7 +7,16 @@ import {
   revisionOf,
   type RunSheet,
 } from '#print';
-import { moonAltitude, moonSemidiameter, type Observer, place, type SkyTarget, toDeg, toRad } from '#sky';
+import {
+  moonAltitude,
+  moonSemidiameter,
+  type Observer,
+  place,
+  type SkyTarget,
+  SUN_UP_RAD,
+  toDeg,
+  toRad,
+} from '#sky';
 import { plannedShowings } from '../events/plannedShowings';
 import { type InstrumentView } from '../instruments/instruments';
 import { eveningAnswer } from '../sky/eveningAnswer';
@@ -227,7 +236,7 @@ export function sunCautions(
 ): string[] {
   const { elongationRad } = place(target, utcMs, observer);
   if (toDeg(elongationRad) >= NEAR_SUN_DEG) return [];
-  const sunUp = place(SUN, utcMs, observer).horizontal!.altitudeRad > toRad(-0.8333);
+  const sunUp = place(SUN, utcMs, observer).horizontal!.altitudeRad > SUN_UP_RAD;
   const apart = `It stands ${String(Math.round(toDeg(elongationRad)))}° from the Sun`;
   const after =
     sunsetMs === null ? 'only while the Sun is down' : `only after sunset at ${clockWords(sunsetMs, zone)}`;

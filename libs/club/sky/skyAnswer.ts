@@ -13,6 +13,7 @@ import {
   constellationOf,
   fromSpherical,
   type Horizontal,
+  isNearRisenSun,
   type Observer,
   type Place,
   place,
@@ -58,9 +59,6 @@ export interface SkyAnswer {
 
 const SUN: SkyTarget = { kind: 'solarSystem', name: 'Sun', body: 'Sun' };
 const MOON: SkyTarget = { kind: 'solarSystem', name: 'Moon', body: 'Moon' };
-
-/** Below this distance from a Sun that is up, no instrument is to be pointed (common practice). */
-const SUN_CLEARANCE_DEG = 15;
 
 /**
  * A target seen from a place with its sky at a UTC instant; without a place the geocentric position alone. A
@@ -116,7 +114,7 @@ export function skyAnswer(
       separationDeg: toDeg(apart(seen, moon)),
     },
     ...skyBehind(horizontal, apart(seen, moon), sun.horizontal!, moon, from.sky, isMoon(target)),
-    cautions: cautionsFor(target, toDeg(seen.elongationRad), toDeg(sun.horizontal!.altitudeRad)),
+    cautions: cautionsFor(target, seen.elongationRad, sun.horizontal!.altitudeRad),
   };
 }
 
@@ -151,15 +149,15 @@ function skyBehind(
 }
 
 /** Cautions that go with pointing anything at a target. */
-function cautionsFor(target: SkyTarget, elongationDeg: number, sunAltitudeDeg: number): string[] {
+function cautionsFor(target: SkyTarget, elongationRad: number, sunAltitudeRad: number): string[] {
   if (target.kind === 'solarSystem' && target.body === 'Sun') {
     return [
       'Never look at the Sun with an instrument or the bare eye. Solar viewing needs certified filters and trained hands.',
     ];
   }
-  if (sunAltitudeDeg > -0.8333 && elongationDeg < SUN_CLEARANCE_DEG) {
+  if (isNearRisenSun(elongationRad, sunAltitudeRad)) {
     return [
-      `The Sun is up and ${elongationDeg.toFixed(1)} degrees away: never point a telescope or binoculars there.`,
+      `The Sun is up and ${toDeg(elongationRad).toFixed(1)} degrees away: never point a telescope or binoculars there.`,
     ];
   }
   return [];
